@@ -1,0 +1,176 @@
+import { boltzmann } from '../constants'
+import { balancedTrajectory, type LatchFailure, type Trajectory } from './balanced'
+import type { Circuit, PairName } from './circuit'
+import { largeSignalDelay } from './departure'
+import { expm2 } from './modes'
+
+/** What one pass of the engine says of a latch. Weights are input-referred: the input difference that balances one unit. */
+export interface LatchAnalysis {
+  /** Regeneration time constant [s]. */
+  readonly tau: number
+  /** t_0 of t_d(v) = t_0 + τ·ln(V_DD/2|v|) [s]; may be negative. */
+  readonly integration: number
+  /** δ/τ: what the large-signal stretch up to V_DD/2 takes longer than linear growth, in time constants; part of t_0. */
+  readonly departure: number
+  /** Input-referred noise of one decision, rms [V]. */
+  readonly noise: number
+  /** Volts of input per volt of V_T difference of each pair. */
+  readonly thresholdWeight: Partial<Record<PairName, number>>
+  /** Volts of input per unit relative k_p difference of each pair. */
+  readonly gainWeight: Partial<Record<PairName, number>>
+  /** Volts of input per unit relative capacitance difference of the side nodes, in their order. */
+  readonly capacitanceWeight: readonly [number, number]
+  /** Volts of input per volt of difference that the side nodes start with. */
+  readonly startWeight: readonly [number, number]
+  /** Arrival times at which an input step still has 90 % and 10 % of its full effect [s]. */
+  readonly arrival90: number
+  readonly arrival10: number
+  /** t_e: when the balanced circuit has come to its equilibrium [s]. */
+  readonly settled: number
+  /** |g|: input gain into the dominant mode at t_e. */
+  readonly gain: number
+  /** P: noise variance in that mode [V²]. */
+  readonly variance: number
+}
+
+interface Totals {
+  readonly input: number
+  readonly variance: number
+  readonly threshold: Float64Array
+  readonly gain: Float64Array
+  readonly capacitance: Float64Array
+  readonly start: readonly [number, number]
+  readonly window: { times: Float64Array; remaining: Float64Array; density: Float64Array }
+}
+
+/** φ at the start of a step from φ at its end, Magnus expansion of order 4 with Simpson moments: dφ/ds = Aᵀφ backward in time. */
+function stepBack(m: Float64Array, at0: number, atMid: number, at1: number, h: number, phi: Float64Array, propagator: Float64Array): void {
+  const mean = (j: number) => (h / 6) * (m[at0 + j] + 4 * m[atMid + j] + m[at1 + j])
+  const change = (j: number) => m[at1 + j] - m[at0 + j]
+  const [s11, s12, s21, s22] = [mean(0), mean(1), mean(2), mean(3)]
+  const [d11, d12, d21, d22] = [change(0), change(1), change(2), change(3)]
+  const k = h / 12
+  const c11 = k * (d12 * s21 - s12 * d21)
+  const c12 = k * (d11 * s12 + d12 * s22 - s11 * d12 - s12 * d22)
+  const c21 = k * (d21 * s11 + d22 * s21 - s21 * d11 - s22 * d21)
+  expm2(s11 + c11, s12 + c12, s21 + c21, s22 - c11, propagator)
+  const [x, o] = [phi[0], phi[1]]
+  phi[0] = propagator[0] * x + propagator[2] * o
+  phi[1] = propagator[1] * x + propagator[3] * o
+}
+
+/** Derivative of φ at a moment: −Aᵀφ. */
+function slopeOf(m: Float64Array, at: number, p: Float64Array, into: Float64Array): void {
+  into[0] = -(m[at] * p[0] + m[at + 2] * p[1])
+  into[1] = -(m[at + 1] * p[0] + m[at + 3] * p[1])
+}
+
+/** Adds weight·(integrands at one moment) to the running sums; returns the input integrand. */
+function gather(run: Trajectory, at: number, p: Float64Array, weight: number, noiseWeight: number, sums: Sums): number {
+  const { mode, moments: m } = run
+  let inputPart = 0
+  mode.pairs.forEach(({ enter, sense, source }, i) => {
+    const entry = enter[0] * p[0] + enter[1] * p[1]
+    const base = at + 6 + 3 * i
+    const drive = entry * m[base]
+    if (source.gate.at === 'input') inputPart += drive
+    sums.threshold[i] -= weight * sense * drive
+    sums.gain[i] += weight * sense * entry * m[base + 1]
+    sums.variance += noiseWeight * entry * entry * m[base + 2]
+  })
+  sums.input += weight * inputPart
+  sums.capacitance[0] -= weight * p[0] * m[at + 4]
+  sums.capacitance[1] -= weight * p[1] * m[at + 5]
+  return inputPart
+}
+
+interface Sums { input: number; variance: number; threshold: Float64Array; gain: Float64Array; capacitance: Float64Array }
+
+/**
+ * One backward pass of the adjoint φ, φ' = −Aᵀφ, from the dominant left mode at the equilibrium: every column's gain is
+ * then an integral ∫φ·b_j dt and the noise ∫(φ·b)²S dt. What comes after the equilibrium is added in closed form
+ * (constant A): 1/λ for constant columns, 1/2λ for noise. This is the limit t_end → ∞ of the forward columns.
+ */
+function adjointPass(run: Trajectory): Totals {
+  const { times, moments, mode, equilibrium } = run
+  const steps = times.length - 1
+  const phi = Float64Array.from(equilibrium.left)
+  const [end, mid, slopeEnd, slopeStart, propagator] = [0, 0, 0, 0, 0].map((_, i) => new Float64Array(i === 4 ? 4 : 2))
+  const sums: Sums = {
+    input: 0, variance: 0, threshold: new Float64Array(mode.pairs.length), gain: new Float64Array(mode.pairs.length), capacitance: new Float64Array(2),
+  }
+  const remaining = new Float64Array(steps + 1)
+  const density = new Float64Array(steps + 1)
+  const row = (i: number) => i * mode.stride
+  density[steps] = gather(run, row(2 * steps), phi, 1 / equilibrium.growth, 1 / (2 * equilibrium.growth), sums)
+  remaining[steps] = sums.input
+  for (let i = steps - 1; i >= 0; i--) {
+    const h = times[i + 1] - times[i]
+    end.set(phi)
+    stepBack(moments, row(2 * i), row(2 * i + 1), row(2 * i + 2), h, phi, propagator)
+    slopeOf(moments, row(2 * i + 2), end, slopeEnd)
+    slopeOf(moments, row(2 * i), phi, slopeStart)
+    for (let j = 0; j < 2; j++) mid[j] = (phi[j] + end[j]) / 2 + (h / 8) * (slopeStart[j] - slopeEnd[j])
+    gather(run, row(2 * i + 2), end, h / 6, h / 6, sums)
+    gather(run, row(2 * i + 1), mid, (2 * h) / 3, (2 * h) / 3, sums)
+    density[i] = gather(run, row(2 * i), phi, h / 6, h / 6, sums)
+    remaining[i] = sums.input
+  }
+  return { ...sums, start: [phi[0], phi[1]], window: { times: Float64Array.from(times), remaining, density } }
+}
+
+/** Time at which a step arriving then still reaches `fraction` of the full response; cubic between the knots. */
+function arrivalAt({ times, remaining, density }: Totals['window'], fraction: number): number {
+  const goal = remaining[0] * fraction
+  let i = 0
+  while (i < times.length - 2 && remaining[i + 1] / remaining[0] > fraction) i++
+  const h = times[i + 1] - times[i]
+  let [low, high] = [0, 1]
+  for (let pass = 0; pass < 50; pass++) {
+    const x = (low + high) / 2
+    const value = remaining[i] * (1 + 2 * x) * (1 - x) ** 2 - density[i] * h * x * (1 - x) ** 2
+      + remaining[i + 1] * x * x * (3 - 2 * x) + density[i + 1] * h * x * x * (1 - x)
+    if (value / goal > 1) low = x
+    else high = x
+  }
+  return times[i] + h * low
+}
+
+/**
+ * One pass of the engine: balanced trajectory, differential mode, noise, weights.
+ *
+ * t_0 = t_e − τ·ln|g| + δ with g the input gain into the dominant mode at t_e and δ what the last, large-signal stretch
+ * up to V_DD/2 takes longer than linear growth; σ_n = √P/|g|, P the variance in that mode;
+ * w_j = −g_j/g, so that a positive difference of V_T asks for a positive input.
+ * Method: Kim, Leibowitz, Ren, Madden, IEEE TCAS-I 56(8), 2009; noise of one device per difference, start 2kT/C.
+ *
+ * @param giveUpAfter time past which the latch counts as too slow [s]
+ * @param departure δ/τ where it is known from a neighbouring design; left out: integrated
+ */
+export function analyseLatch(circuit: Circuit, giveUpAfter: number, departure?: number): LatchAnalysis | LatchFailure {
+  const run = balancedTrajectory(circuit, giveUpAfter)
+  if (typeof run === 'string') return run
+  const totals = adjointPass(run)
+  const tau = 1 / run.equilibrium.growth
+  const g = totals.input
+  const delta = departure === undefined ? largeSignalDelay(circuit, run) : departure * tau
+  const kT = boltzmann * circuit.temperature
+  const initial = totals.start.reduce((sum, p, i) => sum + (p * p * 2 * kT) / circuit.sideCapacitance[i], 0)
+  const named = (values: Float64Array): Partial<Record<PairName, number>> =>
+    Object.fromEntries(run.mode.pairs.map(({ pair }, i) => [pair, -values[i] / g]))
+  return {
+    tau,
+    integration: run.times[run.times.length - 1] - tau * Math.log(Math.abs(g)) + delta,
+    departure: delta / tau,
+    noise: Math.sqrt(totals.variance + initial) / Math.abs(g),
+    thresholdWeight: named(totals.threshold),
+    gainWeight: named(totals.gain),
+    capacitanceWeight: [-totals.capacitance[0] / g, -totals.capacitance[1] / g],
+    startWeight: [-totals.start[0] / g, -totals.start[1] / g],
+    arrival90: arrivalAt(totals.window, 0.9),
+    arrival10: arrivalAt(totals.window, 0.1),
+    settled: run.times[run.times.length - 1],
+    gain: Math.abs(g),
+    variance: totals.variance + initial,
+  }
+}

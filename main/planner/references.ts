@@ -1,0 +1,20 @@
+/** The bibliography by key; workings, sheet and docs cite from here. */
+export const references = {
+  definition: 'definition',
+  practice: 'common practice',
+  brief: 'the brief',
+  ieee1241: 'IEEE Std 1241, Standard for Terminology and Test Methods for Analog-to-Digital Converters',
+  bennett: 'W. R. Bennett, Spectra of Quantized Signals, Bell Syst. Tech. J. 27, 1948',
+  veendrick: 'H. J. M. Veendrick, The Behavior of Flip-Flops Used as Synchronizers, IEEE JSSC 15(2), 1980',
+  pelgrom: 'M. J. M. Pelgrom, A. C. J. Duinmaijer, A. P. G. Welbers, Matching Properties of MOS Transistors, IEEE JSSC 24(5), 1989',
+  kim: 'J. Kim, B. S. Leibowitz, J. Ren, C. J. Madden, Simulation and Analysis of Random Decision Errors in Clocked Comparators, IEEE TCAS-I 56(8), 2009',
+  enz: 'C. C. Enz, F. Krummenacher, E. A. Vittoz, An Analytical MOS Transistor Model, Analog Integr. Circuits Signal Process. 8, 1995 (interpolation form)',
+  plassche: 'R. van de Plassche, CMOS Integrated Analog-to-Digital and Digital-to-Analog Converters, 2nd ed., 2003',
+  nyquist: 'H. Nyquist, Thermal Agitation of Electric Charge in Conductors, Phys. Rev. 32, 1928',
+  walden: 'R. H. Walden, Analog-to-Digital Converter Survey and Analysis, IEEE JSAC 17(4), 1999',
+  schreier: 'R. Schreier, G. C. Temes, Understanding Delta-Sigma Data Converters, 2005',
+  liu: 'C.-C. Liu et al., A 10-bit 50-MS/s SAR ADC With a Monotonic Capacitor Switching Procedure, IEEE JSSC 45(4), 2010',
+  engine: 'latch engine: linear time-varying analysis along the balanced trajectory, after J. Kim et al., IEEE TCAS-I 56(8), 2009',
+  transient: 'latch engine: full nonlinear transient',
+  exactYield: 'exact yield integral of independent Gaussian thresholds',
+} as const

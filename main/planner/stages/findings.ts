@@ -1,0 +1,145 @@
+import { limitNames, type LimitName } from '../../contract/choices'
+import type { ComparatorEntry, Finding, Result } from '../../contract/result'
+import { formatSi } from '../../contract/units'
+import { droopCapacitance } from '../models/input/load'
+import { tapVariance } from '../models/offset/mismatch'
+import { sarDacSigmaLimit } from '../models/yield/successive'
+import type { Bank } from './bank'
+import { offsetPart } from './limits-flash'
+import { sigmaLimits } from './offset-limits'
+import { limitKeys } from './uses'
+
+type Severity = Finding['severity']
+
+const finding = (severity: Severity, code: string, message: string, path: string | null): Finding =>
+  ({ severity, code, message, path, remedy: null, remedies: [] })
+
+/** Where in the brief each limit is most directly eased. */
+const limitPaths: Record<LimitName, string> = {
+  time: 'converter.sample_rate_hz', noise: 'converter.enob_bits', offset: 'comparator.offset_method',
+  kickback: 'budget.kick_share', memory: 'budget.memory_share', input: 'converter.flash.bank_share',
+}
+
+function budgetFindings({ budget, s }: Bank): Finding[] {
+  if (budget.remainder > 0) return []
+  const names = {
+    quantisation: ['quantisation', 'ask for fewer effective bits or plan more bits', 'converter.enob_bits'],
+    jitter: ['aperture jitter', 'ask for less jitter, a lower input frequency or fewer effective bits', 'converter.jitter_s'],
+    sampling: ['sampled thermal noise', 'plan a larger sampling capacitance', s.kind.architecture === 'flash' ? 'converter.flash.sampling_cap_f' : 'converter.sar.unit_cap_f'],
+    reference: ['spread of the reference elements', 'plan better matched elements', s.kind.architecture === 'flash' ? 'converter.flash.ladder_sigma' : 'converter.sar.unit_cap_sigma'],
+  } as const
+  const keys = Object.keys(names) as (keyof typeof names)[]
+  const eater = keys.reduce((a, b) => (budget[b] > budget[a] ? b : a))
+  const [name, remedy, path] = names[eater]
+  const share = Math.round((100 * budget[eater]) / budget.allowed)
+  return [finding('stop', 'budget_exhausted',
+    `Nothing of the error budget is left for the comparators: ${name} alone takes ${share} % of the power that ${s.plan.converter.enob_bits} effective bits allow; ${remedy}.`, path)]
+}
+
+function windowFindings({ positions, s }: Bank): Finding[] {
+  const worst = positions.reduce((a, b) => (b.limits.window_s < a.limits.window_s ? b : a))
+  if (worst.limits.window_s > 0) return []
+  const where = worst.cycle === null ? '' : ` in cycle ${worst.cycle}`
+  return [finding('stop', 'window_negative',
+    `No time is left to decide${where}: the window is ${formatSi(worst.limits.window_s, 's')}. Plan a slower rate, more lanes, or faster logic and settling.`,
+    s.kind.architecture === 'flash' ? 'converter.sample_rate_hz' : 'converter.sar.dac_tau_s')]
+}
+
+function ladderFindings({ s, budget }: Bank): Finding[] {
+  const { kind, plan } = s
+  if (kind.architecture === 'flash') {
+    const sigma = kind.flash.ladder_sigma
+    const yields = sigmaLimits(s)
+    const eaten = tapVariance(s.lsb, sigma, s.codes, s.codes / 2) >= yields.inl ** 2 || (s.lsb * sigma) ** 2 / 2 >= yields.dnl ** 2
+    return eaten && offsetPart(s.lanes) * budget.spreadPower > 0 ? [finding('stop', 'ladder_exhausts_offset',
+      `The ladder's own spread of ${formatSi(sigma * 100, '%')} per element uses up the whole INL or DNL yield: nothing is left for the comparators. Plan better matched elements or wider INL and DNL limits.`,
+      'converter.flash.ladder_sigma')] : []
+  }
+  const allowed = sarDacSigmaLimit(s.codes, plan.converter.dnl_lsb, s.laneYield)
+  return kind.sar.unit_cap_sigma > allowed ? [finding('stop', 'dac_mismatch_yield',
+    `The DAC's unit spread of ${formatSi(kind.sar.unit_cap_sigma * 100, '%')} misses the DNL yield at mid-code: at most ${formatSi(allowed * 100, '%')} would meet it.`,
+    'converter.sar.unit_cap_sigma')] : []
+}
+
+function loadFindings({ s }: Bank): Finding[] {
+  const { kind, plan } = s
+  const [cap, path] = kind.architecture === 'flash' ? [kind.flash.sampling_cap_f, 'converter.flash.sampling_cap_f'] : [kind.arrayCap, 'converter.sar.unit_cap_f']
+  const allowed = droopCapacitance(plan.converter.input_attenuation_db, s.inputFrequency, plan.converter.source_ohm)
+  return cap > allowed ? [finding('caution', 'source_droop',
+    `${formatSi(cap, 'F')} on each side makes the source droop by more than ${plan.converter.input_attenuation_db} dB at ${formatSi(s.inputFrequency, 'Hz')}; at most ${formatSi(allowed, 'F')} would not.`, path)] : []
+}
+
+function drawnFindings({ s, design }: Bank): Finding[] {
+  const { widths } = design
+  const entries = Object.entries(widths) as [string, number | undefined][]
+  return entries.flatMap(([key, value]) => {
+    const least = key === 'input_length_m' ? s.card.l_min_m : key.endsWith('_m') ? s.card.w_min_m : 0
+    return value !== undefined && value < least * (1 - 1e-9) ? [finding('stop', key === 'input_length_m' ? 'length_below_minimum' : 'width_below_minimum',
+      `${key} of ${formatSi(value, 'm')} cannot be drawn: the card's minimum is ${formatSi(least, 'm')}.`, `comparator.widths.${key}`)] : []
+  })
+}
+
+function latchFindings({ evaluated }: Bank): Finding[] {
+  return evaluated.filter((e) => e.failure !== null).slice(0, 1).map(({ condition, commonMode, failure }) => finding('stop', `latch_${failure}`,
+    failure === 'no_regeneration'
+      ? `The latch does not regenerate at ${condition.name} with a common mode of ${formatSi(commonMode, 'V')}: its loop gain stays below one.`
+      : `The latch does not get to a decision in any useful time at ${condition.name} with a common mode of ${formatSi(commonMode, 'V')}: raise the common mode or widen the input pair and tail.`,
+    'converter.common_mode_v'))
+}
+
+const unitOf: Record<LimitName, string> = { time: 's', noise: 'V', offset: 'V', kickback: 'V', memory: 'V', input: 'F' }
+
+function reachedAndLimit(entry: ComparatorEntry, key: LimitName): [number | null, number] {
+  const { reached: r, limits: l } = entry
+  switch (key) {
+    case 'time': return [r.delay_s, l.window_s]
+    case 'noise': return [r.noise_v, l.noise_v]
+    case 'offset': return l.trim_step_v === null ? [r.residual_v, l.offset_v] : [r.trim_step_v, l.trim_step_v]
+    case 'kickback': return [r.kickback_v, l.kickback_v]
+    case 'memory': return [r.memory_v, l.memory_v]
+    case 'input': return [r.input_cap_f, l.input_cap_f]
+  }
+}
+
+const placeOf = (entry: ComparatorEntry): string => (entry.cycle === null ? `comparator ${entry.index}` : `cycle ${entry.cycle}`)
+
+function limitFindings({ entries, s }: Bank): Finding[] {
+  return limitKeys.flatMap((key) => {
+    const over = entries.filter((e) => e.use[key] !== null && e.use[key] > 1)
+    if (over.length === 0) return []
+    const worst = over.reduce((a, b) => (b.use[key]! > a.use[key]! ? b : a))
+    const [reached, limit] = reachedAndLimit(worst, key)
+    const what = key === 'offset' && worst.limits.trim_step_v !== null ? 'Trim step' : limitNames[key]
+    const path = key === 'input' && s.kind.architecture === 'sar' ? 'budget.dac_load_share' : limitPaths[key]
+    return [finding('stop', `${key}_over_limit`,
+      `${what} is over its limit at ${placeOf(worst)}${over.length > 1 ? ` and ${over.length - 1} more` : ''}: ${formatSi(reached, unitOf[key])} of ${formatSi(limit, unitOf[key])}, ${formatSi(worst.use[key]! * 100, '%')} of the limit. This is the nearest design that could be found.`, path)]
+  })
+}
+
+function trimFindings({ design, trimConverged, s }: Bank): Finding[] {
+  if (design.trim === null) return []
+  if (!trimConverged) return [finding('stop', 'trim_range', 'The trim cannot reach the raw offset: the capacitance it needs grows faster than its range. Use a wider input pair.', 'comparator.offset_method')]
+  return design.trim.unit <= s.card.cap.trim_unit_f * (1 + 1e-9) ? [finding('note', 'trim_unit_binds',
+    `The smallest trim capacitor that can be drawn, ${formatSi(s.card.cap.trim_unit_f, 'F')}, sets the trim step; more bits would only widen the range.`, 'comparator.trim_bits')] : []
+}
+
+function overrideFindings({ s }: Bank, ledger: Result['ledger']): Finding[] {
+  const shown = new Set([...ledger.power, ...ledger.area].map((line) => line.item))
+  const seen = new Set<string>()
+  return s.plan.overrides.flatMap((override, i) => {
+    const repeated = seen.has(override.item)
+    seen.add(override.item)
+    if (!shown.has(override.item)) return [finding('caution', 'override_without_line', `${override.item} does not apply to this plan, so its override has no effect.`, `overrides.${i}.item`)]
+    return repeated ? [finding('caution', 'override_repeated', `${override.item} is overridden more than once; the last one counts.`, `overrides.${i}.item`)] : []
+  })
+}
+
+/** Everything the planner has to say of a finished bank, stops first. */
+export function findingsOf(bank: Bank, ledger: Result['ledger']): Finding[] {
+  const all = [
+    ...budgetFindings(bank), ...windowFindings(bank), ...ladderFindings(bank), ...latchFindings(bank), ...drawnFindings(bank),
+    ...limitFindings(bank), ...trimFindings(bank), ...loadFindings(bank), ...overrideFindings(bank, ledger),
+  ]
+  const order: Severity[] = ['stop', 'caution', 'note']
+  return order.flatMap((severity) => all.filter((f) => f.severity === severity))
+}

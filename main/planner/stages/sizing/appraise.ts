@@ -1,0 +1,43 @@
+import type { Condition } from '../../latch/condition'
+import { trimCapacitanceChange } from '../../models/offset/trim'
+import { trimSigmas } from '../offset-limits'
+import type { LatchDesign } from '../design'
+import { latchFigures, patienceOf, type LatchFigures } from '../latch-figures'
+import type { Demand } from '../positions'
+import type { Situation } from '../situation'
+import { attained, limitKeys, pairsOf } from '../uses'
+
+/** How a design stands at one condition and common mode. */
+export interface Appraisal {
+  readonly condition: Condition
+  readonly demand: Demand
+  readonly figures: LatchFigures | null
+  /** reached ÷ limit in the order of `limitKeys`, then the trim range; NaN-free, large where there is no latch. */
+  readonly uses: readonly number[]
+}
+
+/** Use that stands for a latch that does not decide at all. */
+const hopeless = 1e4
+
+/** Part of the trim's units that the range needs; 0 without trim. */
+export function rangeUse(s: Situation, design: LatchDesign, figures: LatchFigures): number {
+  if (design.trim === null) return 0
+  const { circuit, analysis } = figures
+  const range = trimSigmas(s) * figures.offset
+  const change = trimCapacitanceChange(circuit.sideCapacitance[circuit.inner], range, analysis.capacitanceWeight[circuit.inner])
+  return change / (2 ** design.trim.bits * design.trim.unit)
+}
+
+/** Uses against limits that can be met at all; a limit of 0 or less cannot steer the sizing. */
+function usesOf(s: Situation, design: LatchDesign, condition: Condition, demand: Demand, figures: LatchFigures): number[] {
+  const reached = attained(s, design, condition, figures, demand.limits.overdrive_v!)
+  return [...pairsOf(demand.limits, reached).map(([value, limit]) => (limit > 0 ? value / limit : 0)), rangeUse(s, design, figures)]
+}
+
+/** Engine figures and uses of a design at one condition and demand. @param departure δ/τ from a neighbour */
+export function appraise(s: Situation, design: LatchDesign, condition: Condition, demand: Demand, departure?: number): Appraisal {
+  const patience = Math.min(patienceOf(s, demand.limits.window_s), 3000 * s.card.logic.fo4_s)
+  const figures = latchFigures(s, design, condition, demand.commonMode, patience, { departure })
+  if (typeof figures === 'string') return { condition, demand, figures: null, uses: [hopeless, ...limitKeys.map(() => 0)] }
+  return { condition, demand, figures, uses: usesOf(s, design, condition, demand, figures) }
+}

@@ -1,0 +1,103 @@
+import { minimiseConstrained, type Trial } from '../../numerics/constrained'
+import type { Condition } from '../../latch/condition'
+import type { LatchDesign } from '../design'
+import type { Demand } from '../positions'
+import type { Situation } from '../situation'
+import { appraise, type Appraisal } from './appraise'
+import { comparatorArea, integratedEnergy, roughEnergy, trimArea } from './cost'
+import { unknownSpace, type UnknownSpace } from './unknowns'
+
+/** A place at which the search evaluates the latch. */
+export interface Spot { readonly condition: Condition; readonly demand: Demand }
+
+/** What the search takes from a fully integrated neighbour. */
+export interface Calibration {
+  /** δ/τ per spot name. */
+  readonly departure: ReadonlyMap<string, number>
+  /** Integrated over closed-form energy, and where the energy is largest. */
+  readonly energyRatio: number
+  readonly energySpot: Spot
+}
+
+export const spotName = ({ condition, demand }: Spot): string => `${condition.name}@${demand.commonMode}`
+
+/** Constraint value of a use: linear below the limit, logarithmic above, smooth between; met when ≤ 0. */
+const constraintOf = (use: number, margin: number): number => {
+  const held = use / (1 - margin)
+  return held > 1 ? Math.log(held) : Math.max(held - 1, -2)
+}
+
+/** Full integration of a design at every spot: what the closed forms of the search are held to. Null where no latch comes about. */
+export function calibrate(s: Situation, design: LatchDesign, spots: readonly Spot[]): { appraisals: Appraisal[]; calibration: Calibration | null } {
+  const appraisals = spots.map(({ condition, demand }) => appraise(s, design, condition, demand))
+  const departure = new Map<string, number>()
+  let largest = 0
+  let calibration: Calibration | null = null
+  for (const appraisal of appraisals) {
+    if (appraisal.figures === null) continue
+    departure.set(spotName(appraisal), appraisal.figures.analysis.departure)
+    const energy = integratedEnergy(s, appraisal.figures)
+    if (energy > largest) {
+      largest = energy
+      calibration = { departure, energySpot: appraisal, energyRatio: energy / roughEnergy(appraisal.figures.circuit) }
+    }
+  }
+  return { appraisals, calibration }
+}
+
+/** Cost that is made small: energy of a decision at the corner where it is largest, or area with trim. */
+export function costOf(s: Situation, design: LatchDesign, appraisals: readonly Appraisal[], calibration: Calibration): number {
+  if (s.plan.comparator.objective === 'area') return comparatorArea(s, design) + trimArea(s, design)
+  const spot = appraisals.find((a) => spotName(a) === spotName(calibration.energySpot))
+  return spot?.figures ? calibration.energyRatio * roughEnergy(spot.figures.circuit) : Infinity
+}
+
+export interface SearchOptions {
+  readonly trim: false | number | 'free'
+  readonly margin: number
+  readonly iterations: number
+  readonly radius: number
+}
+
+/** One local search over the unknowns with the engine at every step; the spots are the conditions that may bind. */
+export function searchDesign(s: Situation, spots: readonly Spot[], calibration: Calibration, from: LatchDesign, options: SearchOptions): { design: LatchDesign; settled: boolean } {
+  const space = unknownSpace(s.card, options.trim)
+  const evaluate = (x: Float64Array): Trial => {
+    const design = space.toDesign(x)
+    const appraisals = spots.map((spot) => appraise(s, design, spot.condition, spot.demand, calibration.departure.get(spotName(spot)) ?? 0.1))
+    const cost = costOf(s, design, appraisals, calibration)
+    return {
+      objective: Number.isFinite(cost) ? Math.log(cost) : 0,
+      constraints: appraisals.flatMap(({ uses }) => uses.map((use) => constraintOf(use, options.margin))),
+    }
+  }
+  const found = minimiseConstrained({
+    evaluate, lower: space.lower, upper: space.upper, difference: 0.02, price: 12,
+    firstRadius: options.radius, smallestRadius: 1e-3, smallestGain: 2e-4, iterations: options.iterations,
+  }, space.fromDesign(from))
+  return { design: space.toDesign(found.x), settled: found.settled }
+}
+
+/** The design whose worst use is smallest: one more unknown, the bound on every constraint, is made small. */
+export function nearestDesign(s: Situation, spots: readonly Spot[], calibration: Calibration, from: LatchDesign, options: SearchOptions): LatchDesign {
+  const space: UnknownSpace = unknownSpace(s.card, options.trim)
+  const n = space.lower.length
+  let last: { x: Float64Array; values: number[] } | null = null
+  const valuesAt = (x: Float64Array): number[] => {
+    const widths = x.subarray(0, n)
+    if (last !== null && last.x.every((value, i) => value === widths[i])) return last.values
+    const design = space.toDesign(widths)
+    const values = spots.flatMap((spot) => appraise(s, design, spot.condition, spot.demand, calibration.departure.get(spotName(spot)) ?? 0.1).uses)
+      .map((use) => constraintOf(use, 0))
+    last = { x: Float64Array.from(widths), values }
+    return values
+  }
+  const evaluate = (x: Float64Array): Trial => ({ objective: x[n], constraints: valuesAt(x).map((value) => value - x[n]) })
+  const start = space.fromDesign(from)
+  const worst = Math.max(...valuesAt(start))
+  const found = minimiseConstrained({
+    evaluate, lower: Float64Array.from([...space.lower, -2]), upper: Float64Array.from([...space.upper, 20]), difference: 0.02, price: 12,
+    firstRadius: 1, smallestRadius: 1e-3, smallestGain: 1e-3, iterations: 60,
+  }, Float64Array.from([...start, worst]))
+  return space.toDesign(found.x.subarray(0, n))
+}

@@ -1,0 +1,142 @@
+import type { Widths } from '../../../contract/plan'
+import type { LatchDesign } from '../design'
+import type { Demand } from '../positions'
+import type { Situation } from '../situation'
+import { appraise, type Appraisal } from './appraise'
+import { calibrate, costOf, nearestDesign, searchDesign, spotName, type Calibration, type Spot } from './search'
+import { settleTrim, smallestTrim } from './settle-trim'
+import { startDesign } from './start'
+import { widthUnknowns } from './unknowns'
+
+/** Safety below every limit while searching: covers what the search takes from a neighbour. */
+const margin = 0.003
+const passes = 4
+/** Sizes of the first designs tried, in units of the usual one. */
+const startSizes = [1, 6]
+const usualBits = 5
+
+export interface Sized {
+  readonly design: LatchDesign
+  /** Whether every limit that can steer the sizing is met at every spot. */
+  readonly feasible: boolean
+  readonly trimConverged: boolean
+}
+
+/** Drawn dimensions have four digits, so that the printed ones give the same result when they are entered by hand. */
+function drawn(widths: Widths, lower: { w: number; l: number }): Widths {
+  const round = (value: number) => Number(value.toPrecision(4))
+  const entries = widthUnknowns.map((key) => [key, Math.max(key === 'input_length_m' ? lower.l : lower.w, round(widths[key]))])
+  return { ...(Object.fromEntries(entries) as unknown as Widths), extra_cap_f: round(widths.extra_cap_f) }
+}
+
+export const worstUse = (appraisals: readonly Appraisal[]): number => Math.max(...appraisals.flatMap((a) => a.uses))
+
+export function spotsOf(s: Situation, demands: readonly Demand[]): Spot[] {
+  return s.conditions.flatMap((condition) => demands.map((demand) => ({ condition, demand })))
+}
+
+/** The spots that are worst in any of the uses: those that can bind. */
+function bindingSpots(appraisals: readonly Appraisal[], energySpot: Spot): Spot[] {
+  const chosen = new Set<Spot>([energySpot])
+  appraisals[0].uses.forEach((_, i) => {
+    const worst = appraisals.reduce((a, b) => (b.uses[i] > a.uses[i] ? b : a))
+    if (worst.uses[i] > 0.3) chosen.add(worst)
+  })
+  return appraisals.filter((a) => chosen.has(a) || spotName(a) === spotName(energySpot))
+}
+
+interface Candidate { design: LatchDesign; appraisals: Appraisal[]; calibration: Calibration }
+
+const missed = (candidate: Candidate): boolean => worstUse(candidate.appraisals) > 1
+
+/** Searches on the spots that can bind, looks at all, adds what was missed, until nothing is. */
+function refine(s: Situation, spots: readonly Spot[], from: Candidate, trim: false | number | 'free', firstRadius: number): Candidate {
+  let candidate = from
+  let working = bindingSpots(candidate.appraisals, candidate.calibration.energySpot)
+  for (let pass = 0; pass < passes; pass++) {
+    const options = { trim, margin, iterations: 40, radius: pass === 0 ? firstRadius : 0.3 }
+    const { design, settled } = searchDesign(s, working, candidate.calibration, candidate.design, options)
+    const { appraisals, calibration } = calibrate(s, design, spots)
+    if (calibration === null) return candidate
+    candidate = { design, appraisals, calibration }
+    const known = new Set(working.map(spotName))
+    const added = appraisals.filter((a) => a.uses.some((use) => use > 1) && !known.has(spotName(a)))
+    if (added.length === 0 && (settled || pass > 0)) break
+    working = [...working, ...added]
+  }
+  return candidate
+}
+
+/** Rounds to drawn dimensions and settles the trim; the candidate as it would be built. */
+function built(s: Situation, spots: readonly Spot[], candidate: Candidate): Candidate & { trimConverged: boolean } {
+  const widths = drawn(candidate.design.widths, { w: s.card.w_min_m, l: s.card.l_min_m })
+  const { trim } = candidate.design
+  const settled = trim === null ? { design: { widths, trim }, converged: true } : settleTrim(s, widths, trim.bits, spots, trim.unit)
+  const { appraisals, calibration } = calibrate(s, settled.design, spots)
+  return { design: settled.design, appraisals, calibration: calibration ?? candidate.calibration, trimConverged: settled.converged }
+}
+
+const costOfCandidate = (s: Situation, c: Candidate): number => costOf(s, c.design, c.appraisals, c.calibration)
+
+/** Whole numbers of bits worth trying around a relaxed one. */
+function bitChoices(s: Situation, relaxed: LatchDesign): (number | false)[] {
+  if (relaxed.trim === null) return [false]
+  if (s.plan.comparator.trim_bits !== null) return [s.plan.comparator.trim_bits]
+  const below = Math.max(1, Math.floor(relaxed.trim.bits))
+  return [below, Math.min(16, below + 1)]
+}
+
+/** Cheapest design that meets everything from one start; null where none is found. */
+function sizeFrom(s: Situation, spots: readonly Spot[], start: Candidate): (Candidate & { trimConverged: boolean }) | null {
+  const fixed = s.plan.comparator.trim_bits
+  const relaxed = refine(s, spots, start, start.design.trim === null ? false : fixed ?? 'free', 1)
+  const finished = bitChoices(s, relaxed.design).map((bits) => {
+    if (bits === false || fixed !== null) return built(s, spots, relaxed)
+    const whole: LatchDesign = { widths: relaxed.design.widths, trim: { bits, unit: relaxed.design.trim!.unit } }
+    return built(s, spots, refine(s, spots, { ...relaxed, design: whole }, bits, 0.3))
+  }).filter((c) => c.trimConverged && !missed(c))
+  return finished.reduce<(typeof finished)[number] | null>((best, c) => (best === null || costOfCandidate(s, c) < costOfCandidate(s, best) ? c : best), null)
+}
+
+function startCandidate(s: Situation, spots: readonly Spot[], demands: readonly Demand[], size: number): Candidate | null {
+  const bits = s.plan.comparator.offset_method === 'trim' ? s.plan.comparator.trim_bits ?? usualBits : null
+  const design = startDesign(s, demands, bits, size)
+  const { appraisals, calibration } = calibrate(s, design, spots)
+  return calibration === null ? null : { design, appraisals, calibration }
+}
+
+/** The design that comes nearest to meeting everything. */
+function nearest(s: Situation, spots: readonly Spot[], start: Candidate): Sized {
+  const fixed = s.plan.comparator.trim_bits
+  const trim = start.design.trim === null ? false : fixed ?? 'free'
+  const found = nearestDesign(s, spots, start.calibration, start.design, { trim, margin: 0, iterations: 60, radius: 1 })
+  const whole = found.trim === null ? found : { ...found, trim: { ...found.trim, bits: Math.max(1, Math.round(found.trim.bits)) } }
+  const finished = built(s, spots, { ...start, design: whole })
+  return { design: finished.design, feasible: false, trimConverged: finished.trimConverged }
+}
+
+/**
+ * Sizes the latch of the bank so that every limit holds at every chosen corner and common mode, for least energy or area.
+ * Deterministic: the same plan gives the same design, whatever was planned before.
+ */
+export function sizeLatch(s: Situation, demands: readonly Demand[]): Sized {
+  const spots = spotsOf(s, demands)
+  const starts = startSizes.map((size) => startCandidate(s, spots, demands, size)).filter((c) => c !== null)
+  if (starts.length === 0) return { design: startDesign(s, demands, null, 1), feasible: false, trimConverged: true }
+  for (const start of starts) {
+    const found = sizeFrom(s, spots, start)
+    if (found !== null) return { design: found.design, feasible: true, trimConverged: true }
+  }
+  return nearest(s, spots, starts[0])
+}
+
+/** Given widths as they stand; only an open number of trim bits is found. */
+export function manualLatch(s: Situation, demands: readonly Demand[]): Sized {
+  const spots = spotsOf(s, demands)
+  const widths = s.plan.comparator.widths!
+  if (s.plan.comparator.offset_method !== 'trim') return { design: { widths, trim: null }, feasible: true, trimConverged: true }
+  const bits = s.plan.comparator.trim_bits
+  const settled = bits === null ? smallestTrim(s, widths, spots) : settleTrim(s, widths, bits, spots)
+  const feasible = worstUse(spots.map(({ condition, demand }) => appraise(s, settled.design, condition, demand, 0.1))) <= 1
+  return { design: settled.design, feasible, trimConverged: settled.converged }
+}
