@@ -1,42 +1,28 @@
 import type { Card } from '../contract/cards'
 import type { Plan } from '../contract/plan'
 import { resultSchemaId, type Result } from '../contract/result'
+import { bankOf, canBeSized } from './bank-of'
 import type { Bank } from './stages/bank'
-import { errorBudget } from './stages/budget'
 import { cornerEntries, designEntry } from './stages/corners'
 import { findingsOf } from './stages/findings'
 import { ledgers } from './stages/ledger'
-import { flashPositions } from './stages/limits-flash'
-import { sarPositions } from './stages/limits-sar'
-import { demandsOf } from './stages/positions'
 import { budgetLines, predictedOf } from './stages/predicted'
-import { comparatorEntries, evaluateDesign } from './stages/reached'
 import { withRemedies } from './stages/remedies'
 import { rounded } from './stages/rounded'
-import { situationOf } from './stages/situation'
-import { manualLatch, sizeLatch } from './stages/sizing/size'
 import { workingsOf } from './stages/workings/all'
 
 export interface PlanOptions {
   /** Index of the comparator whose workings are wanted; left out: the tightest. */
   readonly workingsFor?: number
-}
-
-/** Brief, budget, limits, sizing and evaluation: the bank before it is summed up. */
-export function bankOf(document: Plan, card: Card): Bank {
-  const s = situationOf(document, card)
-  const budget = errorBudget(s)
-  const positions = s.kind.architecture === 'flash' ? flashPositions(s, s.kind, budget) : sarPositions(s, s.kind, budget)
-  const demands = demandsOf(positions)
-  const { design, trimConverged } = document.comparator.sizing === 'manual' ? manualLatch(s, demands) : sizeLatch(s, demands)
-  const evaluated = evaluateDesign(s, design, demands)
-  return { s, budget, positions, demands, design, trimConverged, evaluated, entries: comparatorEntries(s, design, positions, evaluated) }
+  /** Whether an infeasible plan is answered with verified remedies, which takes several plans; default true. */
+  readonly remedies?: boolean
 }
 
 /** The plan without looking for remedies. */
 export function planOnce(document: Plan, card: Card, options: PlanOptions): Result {
-  const bank = bankOf(document, card)
-  const { s } = bank
+  const remembered = bankOf(document, card)
+  const s = { ...remembered.s, plan: document }
+  const bank: Bank = { ...remembered, s }
   const { all, largest } = ledgers(bank)
   const budget = budgetLines(bank, largest.condition)
   const predicted = predictedOf(bank, budget, largest.ledger.power_w)
@@ -64,5 +50,11 @@ export function planOnce(document: Plan, card: Card, options: PlanOptions): Resu
  * @returns a result without NaN or Infinity; what cannot be built is a `stop` finding
  */
 export function plan(document: Plan, card: Card, options: PlanOptions = {}): Result {
-  return withRemedies(planOnce(document, card, options), card)
+  const result = planOnce(document, card, options)
+  if (options.remedies === false) return result
+  return withRemedies(result, (changed) => {
+    if (!canBeSized(changed, card)) return null
+    const tried = planOnce(changed, card, {})
+    return tried.findings.some((f) => f.severity === 'stop') ? null : tried
+  })
 }

@@ -1,6 +1,6 @@
 import { integrateStiff, type OdeStep } from '../numerics/rosenbrock'
 import type { Circuit } from './circuit'
-import { clockSlope, network, nodeDerivatives, nodeRates, setClock, type ClockEdge, type Network } from './network'
+import { clockSlope, network, nodeDerivatives, nodeRates, setClock, type ClockEdge } from './network'
 
 /** State of the full circuit: plus side nodes, minus side nodes, shared nodes [V]; then the charge drawn so far [C]. */
 export interface FullState { readonly nodes: Float64Array; readonly charge: number }
@@ -20,7 +20,7 @@ export interface PhaseOptions {
   readonly until: number
   /** Settled once every slope stays below this [V/s]; 0 runs to `until`. */
   readonly slopeFloor: number
-  readonly watch?: (step: OdeStep, net: Network) => boolean
+  readonly watch?: (step: OdeStep) => boolean
 }
 
 const relative = 1e-4
@@ -71,7 +71,7 @@ export function runPhase(circuit: Circuit, from: FullState, options: PhaseOption
       let speed = 0
       for (let i = 0; i < size; i++) speed = Math.max(speed, Math.abs(step.f1[i]))
       settled = step.t1 > circuit.clockRise / 2 && speed < options.slopeFloor
-      return (options.watch?.(step, net) ?? false) || settled
+      return (options.watch?.(step) ?? false) || settled
     },
   })
   return { state: { nodes: run.y.slice(0, size), charge: from.charge + run.y[size] * reference }, endTime: run.t, settled }

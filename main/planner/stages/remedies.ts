@@ -1,4 +1,121 @@
-import type { Card } from '../../contract/cards'
-import type { Result } from '../../contract/result'
+import type { Plan } from '../../contract/plan'
+import type { Finding, Remedy, Result } from '../../contract/result'
+import { formatSi } from '../../contract/units'
 
-export const withRemedies = (result: Result, _card: Card): Result => result
+/** A change of the brief that may help, before it is tried. */
+interface Idea { readonly what: string; readonly set: Remedy['set'] }
+
+type SettableValue = Remedy['set'][number]['value']
+
+const one = (what: string, path: string, value: SettableValue): Idea => ({ what, set: [{ path, value }] })
+const tidy = (value: number): number => Number(value.toPrecision(4))
+
+const moreLanes = ({ converter }: Plan): Idea[] =>
+  converter.architecture === 'flash' ? [2, 4].map((f) => converter.lanes * f).filter((lanes) => lanes <= 64).map((lanes) => one(`${lanes} lanes`, 'converter.lanes', lanes)) : []
+
+const slower = ({ converter }: Plan): Idea[] => [0.75, 0.5, 0.25].map((f) => {
+  const rate = tidy(converter.sample_rate_hz * f)
+  return one(`${formatSi(rate, 'S/s')}`, 'converter.sample_rate_hz', rate)
+})
+
+const moreLatches = ({ converter }: Plan): Idea[] =>
+  converter.flash !== undefined && converter.architecture === 'flash' && converter.flash.capture_latches < 3
+    ? [one(`${converter.flash.capture_latches + 1} capture latches`, 'converter.flash.capture_latches', converter.flash.capture_latches + 1)] : []
+
+const relaxedErrors = ({ converter }: Plan): Idea[] =>
+  converter.error_rate < 1e-6 ? [one(`an error rate of ${tidy(converter.error_rate * 1e4)}`, 'converter.error_rate', tidy(converter.error_rate * 1e4))] : []
+
+const higherCommonMode = ({ converter }: Plan): Idea[] => [1.1, 1.2].map((f) => {
+  const level = tidy(converter.common_mode_v * f)
+  return one(`a common mode of ${formatSi(level, 'V')}`, 'converter.common_mode_v', level)
+})
+
+const trimmed = ({ comparator }: Plan): Idea[] => (comparator.offset_method === 'size' ? [one('trim', 'comparator.offset_method', 'trim')]
+  : comparator.trim_bits !== null ? [one('as many trim bits as it takes', 'comparator.trim_bits', null)] : [])
+
+const fewerBits = ({ converter }: Plan): Idea[] => [0.3, 0.6, 1].map((less) => tidy(converter.enob_bits - less)).filter((enob) => enob > 1)
+  .map((enob) => one(`${enob} effective bits`, 'converter.enob_bits', enob))
+
+const widerLinearity = ({ converter }: Plan): Idea[] => [1.5, 2].map((f) => ({
+  what: `INL and DNL limits of ${tidy(converter.inl_lsb * f)} and ${tidy(converter.dnl_lsb * f)} LSB`,
+  set: [{ path: 'converter.inl_lsb', value: tidy(converter.inl_lsb * f) }, { path: 'converter.dnl_lsb', value: tidy(converter.dnl_lsb * f) }],
+}))
+
+const scaled = (plan: Plan, path: string, value: number, factors: readonly number[], say: (v: number) => string): Idea[] =>
+  factors.map((f) => tidy(value * f)).map((v) => one(say(v), path, v))
+
+const largerShare = (plan: Plan, key: 'kick_share' | 'memory_share' | 'dac_load_share', name: string, unit: string): Idea[] =>
+  scaled(plan, `budget.${key}`, plan.budget[key], [1.5, 2.5], (v) => `a ${name} of ${v}${unit}`)
+
+function largerCapacitance(plan: Plan): Idea[] {
+  const { converter } = plan
+  return converter.architecture === 'flash'
+    ? scaled(plan, 'converter.flash.sampling_cap_f', converter.flash!.sampling_cap_f, [2, 4], (v) => `a sampling capacitor of ${formatSi(v, 'F')}`)
+    : scaled(plan, 'converter.sar.unit_cap_f', converter.sar!.unit_cap_f, [2, 4], (v) => `unit capacitors of ${formatSi(v, 'F')}`)
+}
+
+function betterElements({ converter }: Plan): Idea[] {
+  const [path, value] = converter.architecture === 'flash' ? ['converter.flash.ladder_sigma', converter.flash!.ladder_sigma] : ['converter.sar.unit_cap_sigma', converter.sar!.unit_cap_sigma]
+  return [0.5, 0.25].map((f) => tidy((value as number) * f)).map((v) => one(`elements that match to ${formatSi(v * 100, '%')}`, path as string, v))
+}
+
+const lighterLadder = ({ converter }: Plan): Idea[] => (converter.architecture === 'flash'
+  ? [0.5, 0.25].map((f) => tidy(converter.flash!.ladder_ohm * f)).map((v) => one(`a ladder of ${formatSi(v, 'Ω')}`, 'converter.flash.ladder_ohm', v)) : [])
+
+const biggerBankShare = ({ converter }: Plan): Idea[] => (converter.architecture === 'flash'
+  ? [2].map((f) => tidy(converter.flash!.bank_share * f)).map((v) => one(`a bank share of ${v}`, 'converter.flash.bank_share', v)) : [])
+
+const ideasByCode: Record<string, (plan: Plan) => Idea[]> = {
+  time_over_limit: (p) => [...moreLatches(p), ...moreLanes(p), ...slower(p), ...higherCommonMode(p), ...relaxedErrors(p)],
+  window_negative: (p) => [...moreLanes(p), ...slower(p)],
+  latch_too_slow: (p) => [...higherCommonMode(p), ...slower(p)],
+  latch_no_regeneration: (p) => higherCommonMode(p),
+  noise_over_limit: (p) => [...fewerBits(p), ...largerCapacitance(p), ...slower(p)],
+  offset_over_limit: (p) => [...trimmed(p), ...widerLinearity(p), ...fewerBits(p), ...largerCapacitance(p)],
+  kickback_over_limit: (p) => [...lighterLadder(p), ...trimmed(p), ...largerShare(p, 'kick_share', 'kickback share', ' LSB'), ...largerCapacitance(p)],
+  memory_over_limit: (p) => [...slower(p), ...moreLanes(p), ...largerShare(p, 'memory_share', 'memory share', ' LSB')],
+  input_over_limit: (p) => [...trimmed(p), ...largerCapacitance(p), ...biggerBankShare(p), ...lighterLadder(p), ...largerShare(p, 'dac_load_share', 'DAC load share', '')],
+  budget_exhausted: (p) => [...fewerBits(p), ...largerCapacitance(p), ...betterElements(p)],
+  ladder_exhausts_offset: (p) => [...betterElements(p), ...widerLinearity(p)],
+  dac_mismatch_yield: (p) => [...betterElements(p), ...widerLinearity(p)],
+  trim_range: (p) => [...fewerBits(p), ...widerLinearity(p)],
+}
+
+const mostTries = 8
+const wanted = 3
+
+/** Puts a value at a dotted path of a copy of the plan. */
+function withValue(plan: Plan, path: string, value: unknown): Plan {
+  const [key, ...rest] = path.split('.')
+  const record = plan as unknown as Record<string, unknown>
+  return { ...record, [key]: rest.length === 0 ? value : withValue(record[key] as Plan, rest.join('.'), value) } as unknown as Plan
+}
+
+export const applied = (plan: Plan, set: Remedy['set']): Plan => set.reduce((changed, { path, value }) => withValue(changed, path, value), plan)
+
+/** Ideas of all stops, taken in turn, each once; the first of every stop before the second of any. */
+function ideasFor(plan: Plan, stops: readonly Finding[]): Idea[] {
+  const lists = stops.map((stop) => ideasByCode[stop.code]?.(plan) ?? [])
+  const longest = Math.max(0, ...lists.map((list) => list.length))
+  const mixed = Array.from({ length: longest }, (_, i) => lists.flatMap((list) => list.slice(i, i + 1))).flat()
+  const seen = new Set<string>()
+  return mixed.filter((idea) => !seen.has(JSON.stringify(idea.set)) && seen.add(JSON.stringify(idea.set)))
+}
+
+/**
+ * Changes that make an infeasible plan feasible, each verified by planning again; attached to every stop.
+ * @param plan the infeasible result's plan; @param attempt plans a changed brief and gives its result when nothing stops it
+ */
+export function withRemedies(result: Result, attempt: (plan: Plan) => Result | null): Result {
+  const stops = result.findings.filter((f) => f.severity === 'stop')
+  if (stops.length === 0) return result
+  const found: Remedy[] = []
+  for (const idea of ideasFor(result.plan, stops).slice(0, mostTries)) {
+    const tried = attempt(applied(result.plan, idea.set))
+    if (tried === null) continue
+    found.push({ text: `${idea.what}: feasible, ${formatSi(tried.ledger.power_w, 'W')}`, set: idea.set })
+    if (found.length === wanted) break
+  }
+  const remedied = (f: Finding): Finding => (f.severity === 'stop' ? { ...f, remedy: found[0]?.text ?? null, remedies: found } : f)
+  return { ...result, findings: result.findings.map(remedied) }
+}

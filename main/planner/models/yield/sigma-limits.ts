@@ -2,7 +2,7 @@ import { normalTailInverse } from '../../numerics/statistics'
 import { sigmasHoldingAll } from './absolute-inl'
 import { dnlLoss } from './dnl'
 import { whereLossReaches } from './loss-root'
-import { remembering } from './memo'
+import { remembering } from '../../numerics/memo'
 import { terminalInlLoss } from './terminal-inl'
 
 /** Straight line that INL is measured against and that a yield can be integrated for (best fit is left to the trials). */

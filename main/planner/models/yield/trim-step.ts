@@ -1,5 +1,5 @@
 import { whereLossReaches } from './loss-root'
-import { remembering } from './memo'
+import { remembering } from '../../numerics/memo'
 import type { InlLine } from './sigma-limits'
 import { tailReach } from './threshold-error'
 import { trimmedDnlLoss, trimmedInlLoss, type TrimmedBank } from './trimmed-bank'

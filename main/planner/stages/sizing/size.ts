@@ -1,4 +1,5 @@
 import type { Widths } from '../../../contract/plan'
+import { remembering } from '../../numerics/memo'
 import type { LatchDesign } from '../design'
 import type { Demand } from '../positions'
 import type { Situation } from '../situation'
@@ -14,6 +15,7 @@ const passes = 4
 /** Sizes of the first designs tried, in units of the usual one. */
 const startSizes = [1, 6]
 const usualBits = 5
+const sizesKept = 6
 
 export interface Sized {
   readonly design: LatchDesign
@@ -115,19 +117,27 @@ function nearest(s: Situation, spots: readonly Spot[], start: Candidate): Sized 
   return { design: finished.design, feasible: false, trimConverged: finished.trimConverged }
 }
 
+/** The cheapest design that meets every limit, from the first start that leads to one; null where none does. */
+export const sizeFeasible = remembering((s: Situation, demands: readonly Demand[]): LatchDesign | null => {
+  const spots = spotsOf(s, demands)
+  for (const size of startSizes) {
+    const start = startCandidate(s, spots, demands, size)
+    const found = start === null ? null : sizeFrom(s, spots, start)
+    if (found !== null) return found.design
+  }
+  return null
+}, (s) => JSON.stringify([s.plan.converter, s.plan.comparator, s.plan.budget, s.plan.corners, s.card]), sizesKept)
+
 /**
  * Sizes the latch of the bank so that every limit holds at every chosen corner and common mode, for least energy or area.
  * Deterministic: the same plan gives the same design, whatever was planned before.
  */
 export function sizeLatch(s: Situation, demands: readonly Demand[]): Sized {
+  const design = sizeFeasible(s, demands)
+  if (design !== null) return { design, feasible: true, trimConverged: true }
   const spots = spotsOf(s, demands)
-  const starts = startSizes.map((size) => startCandidate(s, spots, demands, size)).filter((c) => c !== null)
-  if (starts.length === 0) return { design: startDesign(s, demands, null, 1), feasible: false, trimConverged: true }
-  for (const start of starts) {
-    const found = sizeFrom(s, spots, start)
-    if (found !== null) return { design: found.design, feasible: true, trimConverged: true }
-  }
-  return nearest(s, spots, starts[0])
+  const start = startCandidate(s, spots, demands, startSizes[0]) ?? startCandidate(s, spots, demands, startSizes[1])
+  return start === null ? { design: startDesign(s, demands, null, 1), feasible: false, trimConverged: true } : nearest(s, spots, start)
 }
 
 /** Given widths as they stand; only an open number of trim bits is found. */

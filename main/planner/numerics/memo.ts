@@ -11,8 +11,7 @@ export function remembering<A extends readonly unknown[], R>(
   const answers = new Map<string, R>()
   return (...args) => {
     const name = key(...args)
-    const known = answers.get(name)
-    if (known !== undefined) return known
+    if (answers.has(name)) return answers.get(name) as R
     const answer = compute(...args)
     if (answers.size >= kept) answers.delete(answers.keys().next().value as string)
     answers.set(name, answer)
