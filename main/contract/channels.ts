@@ -19,7 +19,8 @@ export const channels = {
   'demos.list': { hosts: 'both', request: z.strictObject({}) },
   'document.read': { hosts: 'both', request: z.strictObject({ text }) },
   'document.write': { hosts: 'both', request: z.strictObject({ document }) },
-  'plan.run': { hosts: 'both', request: z.strictObject({ document, revision }) },
+  /** `remedies: false` answers sooner: an infeasible plan comes without the remedies that take several plans to verify. */
+  'plan.run': { hosts: 'both', request: z.strictObject({ document, revision, remedies: z.boolean().default(true) }) },
   'plan.workings': { hosts: 'both', request: z.strictObject({ document, index: z.int().min(1) }) },
   'waves.run': { hosts: 'both', request: z.strictObject({ document, index: z.int().min(1), overdrive_v: z.number().positive().max(20).nullable() }) },
   'sheet.make': { hosts: 'both', request: z.strictObject({ document, paper: z.enum(['A4', 'LETTER']), date: z.iso.date().nullable() }) },

@@ -3,10 +3,12 @@ import type { Plan } from '../contract/plan'
 import { remembering } from './numerics/memo'
 import type { Bank } from './stages/bank'
 import { errorBudget } from './stages/budget'
+import { briefFindings } from './stages/findings'
 import { flashPositions } from './stages/limits-flash'
 import { sarPositions } from './stages/limits-sar'
 import { demandsOf } from './stages/positions'
 import { comparatorEntries, evaluateDesign } from './stages/reached'
+import { unmendable } from './stages/shortfall'
 import { situationOf } from './stages/situation'
 import { manualLatch, sizeFeasible, sizeLatch } from './stages/sizing/size'
 
@@ -22,12 +24,15 @@ function askedOf(document: Plan, card: Card) {
   return { s, budget, positions, demands: demandsOf(positions) }
 }
 
-/** Quick answer whether a latch that meets every limit is found, without looking for the nearest one otherwise. */
-export function canBeSized(document: Plan, card: Card): boolean {
-  const { s, demands } = askedOf(document, card)
-  const impossible = demands.some(({ limits }) => limits.window_s <= 0 || limits.noise_v <= 0 || limits.offset_v <= 0)
-  if (impossible) return false
-  return document.comparator.sizing === 'manual' || sizeFeasible(s, demands) !== null
+/**
+ * How far a plan is from being feasible, without looking for the nearest design: 0 where one is found that meets everything,
+ * else the worst use the search was left with, and much more for every stop that no latch can mend.
+ */
+export function shortfallOf(document: Plan, card: Card): number {
+  const asked = askedOf(document, card)
+  const stops = briefFindings(asked).length
+  if (stops > 0) return stops * unmendable
+  return document.comparator.sizing === 'manual' ? 0 : Math.min(sizeFeasible(asked.s, asked.demands).miss, unmendable - 1)
 }
 
 /**

@@ -1,7 +1,7 @@
 import type { Card } from '../contract/cards'
 import type { Plan } from '../contract/plan'
 import { resultSchemaId, type Result } from '../contract/result'
-import { bankOf, canBeSized } from './bank-of'
+import { bankOf, shortfallOf } from './bank-of'
 import type { Bank } from './stages/bank'
 import { cornerEntries, designEntry } from './stages/corners'
 import { findingsOf } from './stages/findings'
@@ -52,9 +52,8 @@ export function planOnce(document: Plan, card: Card, options: PlanOptions): Resu
 export function plan(document: Plan, card: Card, options: PlanOptions = {}): Result {
   const result = planOnce(document, card, options)
   if (options.remedies === false) return result
-  return withRemedies(result, (changed) => {
-    if (!canBeSized(changed, card)) return null
-    const tried = planOnce(changed, card, {})
-    return tried.findings.some((f) => f.severity === 'stop') ? null : tried
+  return withRemedies(result, {
+    shortfall: (changed) => shortfallOf(changed, card),
+    replan: (changed) => planOnce(changed, card, {}),
   })
 }

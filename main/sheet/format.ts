@@ -31,6 +31,7 @@ export function ofLimit(reached: number | null, limit: number | null, unit: stri
 /** Reached ÷ limit: 1 is at the limit. */
 export function useOf(use: number | null): string {
   if (use === null) return dash
+  if (use > 0 && use < 0.005) return '<0.01'
   return use >= 10 ? plain(use, 3) : use.toFixed(2).replace('-', '−')
 }
 

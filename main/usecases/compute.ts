@@ -8,6 +8,8 @@ import { isSuperseded } from './superseded'
 export interface PlanOptions {
   /** Entry whose workings are wanted, from 1; the tightest when absent. */
   readonly workingsFor?: number
+  /** Whether remedies of an infeasible plan are looked for; default true. */
+  readonly remedies?: boolean
 }
 
 export interface WavesOptions {

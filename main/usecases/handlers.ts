@@ -39,14 +39,14 @@ function handlers(compute: ComputePool, host: AnswerOptions['host']): Table<Shar
     'demos.list': async () => succeed({ demos }),
     'document.read': async ({ text }) => map(readPlan(text), ({ plan, document, changes }) => ({ plan, document, changes })),
     'document.write': async ({ document }) => succeed({ text: writePlan(document) }),
-    'plan.run': async ({ document, revision }, asker) => {
+    'plan.run': async ({ document, revision, remedies }, asker) => {
       const read = validatePlan(document)
-      return read.ok ? map(await runPlan(newest('plan.run', asker), read.value), (result) => ({ result, revision })) : read
+      return read.ok ? map(await runPlan(newest('plan.run', asker), read.value, { remedies }), (result) => ({ result, revision })) : read
     },
     'plan.workings': async ({ document, index }, asker) => {
       const read = validatePlan(document)
       if (!read.ok) return read
-      return map(await runPlan(newest('plan.workings', asker), read.value, { workingsFor: index }), ({ workings }) => ({ workings }))
+      return map(await runPlan(newest('plan.workings', asker), read.value, { workingsFor: index, remedies: false }), ({ workings }) => ({ workings }))
     },
     'waves.run': async ({ document, index, overdrive_v }, asker) => {
       const read = validatePlan(document)

@@ -20,6 +20,7 @@ describe('numbers of the sheet', () => {
     expect(ofLimit(188e-12, null, 's')).toBe('188 ps')
     expect(ofLimit(188e-12, 0, 's')).toBe('188 ps of 0 s')
     expect(useOf(null)).toBe('—')
+    expect([useOf(0.987), useOf(0.001), useOf(22.41)]).toEqual(['0.99', '<0.01', '22.4'])
   })
 
   it('keeps a negative limit negative', () => {

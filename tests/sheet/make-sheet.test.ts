@@ -5,7 +5,7 @@ import { formatSi } from '../../main/contract/units'
 import { makeSheet, type SheetOptions } from '../../main/sheet/make-sheet'
 import { margins } from '../../main/sheet/theme'
 import { largeFlash, stoppedFlash, tenCycleSar, trimmedFlash } from './fixture'
-import { linesOf, readPdf, textOf, type ReadPage, type ReadPdf } from './read-pdf'
+import { linesOf, outside, readPdf, textOf, type ReadPage, type ReadPdf } from './read-pdf'
 
 const options: SheetOptions = { paper: 'A4', date: new Date('2026-02-03T12:34:56Z'), version: '0.1.0', checksum: '5f1c0d7a9b32e4466b1d0a8c3f5e7790aa12bb34cc56dd78ee90ff1234567890' }
 const sections = ['Title and key figures', 'What is to be built', 'Limits common to all comparators', 'The bank', 'Each comparator', 'The design', 'Error budget',
@@ -25,8 +25,7 @@ beforeAll(async () => {
 
 const each = Object.keys(fixtures) as Name[]
 
-/** Texts that leave the room between the margins. */
-const outside = (page: ReadPage) => page.texts.filter(({ x, width }) => x < margins[0] - 1 || x + width > page.width - margins[2] + 1)
+const strays = (page: ReadPage) => outside(page, margins[0], margins[2])
 
 describe('every sheet', () => {
   it.each(each)('%s: is made of a result that the contract allows', (name) => {
@@ -49,7 +48,7 @@ describe('every sheet', () => {
 
   it.each(each)('%s: keeps every text between the margins', (name) => {
     for (const page of sheets[name].pages) {
-      expect(outside(page)).toEqual([])
+      expect(strays(page)).toEqual([])
       expect(page.texts.filter(({ y }) => y < 20 || y > page.height - 20)).toEqual([])
     }
   })
@@ -185,7 +184,7 @@ describe('bytes and paper', () => {
     const letter = readPdf(await makeSheet(trimmedFlash(), { ...options, paper: 'LETTER' }))
     expect([letter.pages[0].width, letter.pages[0].height]).toEqual([612, 792])
     expect([sheets.trimmedFlash.pages[0].width, sheets.trimmedFlash.pages[0].height]).toEqual([595.28, 841.89])
-    expect(letter.pages.flatMap(outside)).toEqual([])
+    expect(letter.pages.flatMap(strays)).toEqual([])
     expect(letter.outline).toEqual(sections)
   })
 
@@ -195,7 +194,7 @@ describe('bytes and paper', () => {
     const read = readPdf(await makeSheet({ ...result, plan }, options))
     const texts = read.pages.flatMap((page) => page.texts)
     expect(texts.filter((text) => text.missing > 0)).toEqual([])
-    expect(outside(read.pages[0])).toEqual([])
+    expect(strays(read.pages[0])).toEqual([])
     expect(textOf(read)).toContain('Ж. Ωμέγα')
     expect(textOf(read)).toContain('second line')
   })

@@ -8,6 +8,8 @@ export interface PlacedText {
   readonly x: number
   readonly y: number
   readonly width: number
+  /** Width without the spaces at its end. */
+  readonly ink: number
   /** Glyphs that the font does not have. */
   readonly missing: number
 }
@@ -52,6 +54,10 @@ export function linesOf({ texts }: ReadPage): string[] {
   }
   return lines.map(({ text }) => text.replace(/[\u00a0\u200b]/g, (c) => (c === '\u00a0' ? ' ' : '')).trim()).filter((text) => text !== '')
 }
+
+/** Texts that leave the room between two margins. */
+export const outside = ({ texts, width }: ReadPage, left: number, right: number): PlacedText[] =>
+  texts.filter(({ x, ink }) => x < left - 1 || x + ink > width - right + 1)
 
 export const textOf = (pdf: ReadPdf): string => pdf.pages.flatMap(linesOf).join('\n')
 
@@ -160,9 +166,12 @@ function placed(line: string, font: Font, size: number, at: Matrix): PlacedText 
   const glyphs = codes.flatMap(([, hex]) => hex?.match(/.{4}/g)?.map((code) => parseInt(code, 16)) ?? [])
   const moved = codes.reduce((sum, [, hex, shift]) => (hex === undefined ? sum + Number(shift) : sum), 0)
   const scale = Math.hypot(at[0], at[1])
+  const text = glyphs.map((glyph) => font.letters.get(glyph) ?? '').join('')
+  const em = (size * scale) / 1000
+  const sum = (some: readonly number[]): number => some.reduce((all, glyph) => all + (font.widths[glyph] ?? 0), 0)
+  const width = (sum(glyphs) - moved) * em
   return {
-    text: glyphs.map((glyph) => font.letters.get(glyph) ?? '').join(''), font: font.name, size: size * scale, x: at[4], y: at[5],
-    width: ((glyphs.reduce((sum, glyph) => sum + (font.widths[glyph] ?? 0), 0) - moved) / 1000) * size * scale,
+    text, font: font.name, size: size * scale, x: at[4], y: at[5], width, ink: width - sum(glyphs.slice(text.trimEnd().length)) * em,
     missing: glyphs.filter((glyph) => glyph === 0).length,
   }
 }

@@ -97,7 +97,8 @@ function adjointPass(run: Trajectory): Totals {
   const phi = Float64Array.from(equilibrium.left)
   const [end, mid, slopeEnd, slopeStart, propagator] = [0, 0, 0, 0, 0].map((_, i) => new Float64Array(i === 4 ? 4 : 2))
   const sums: Sums = {
-    input: 0, variance: 0, threshold: new Float64Array(mode.pairs.length), gain: new Float64Array(mode.pairs.length), capacitance: new Float64Array(2),
+    input: 0, variance: 0, capacitance: new Float64Array(2),
+    threshold: new Float64Array(mode.pairs.length), gain: new Float64Array(mode.pairs.length),
   }
   const remaining = new Float64Array(steps + 1)
   const density = new Float64Array(steps + 1)

@@ -37,7 +37,9 @@ const sweeps = 400
  *
  * @param inverse B⁻¹;  @returns d and the multipliers of the rows
  */
-export function quadraticStep(inverse: readonly Float64Array[], gradient: Float64Array, rows: readonly Row[]): { d: Float64Array; multipliers: Float64Array } {
+export function quadraticStep(
+  inverse: readonly Float64Array[], gradient: Float64Array, rows: readonly Row[],
+): { d: Float64Array; multipliers: Float64Array } {
   const n = gradient.length
   const times = (v: Float64Array) => Float64Array.from(inverse, (row) => row.reduce((sum, value, j) => sum + value * v[j], 0))
   const d = times(gradient).map((value) => -value)

@@ -11,6 +11,9 @@ import { limitKeys } from './uses'
 
 type Severity = Finding['severity']
 
+/** What is known before any latch is sized. */
+export type Asked = Pick<Bank, 's' | 'budget' | 'positions'>
+
 const finding = (severity: Severity, code: string, message: string, path: string | null): Finding =>
   ({ severity, code, message, path, remedy: null, remedies: [] })
 
@@ -20,7 +23,7 @@ const limitPaths: Record<LimitName, string> = {
   kickback: 'budget.kick_share', memory: 'budget.memory_share', input: 'converter.flash.bank_share',
 }
 
-function budgetFindings({ budget, s }: Bank): Finding[] {
+function budgetFindings({ budget, s }: Asked): Finding[] {
   if (budget.remainder > 0) return []
   const names = {
     quantisation: ['quantisation', 'ask for fewer effective bits or plan more bits', 'converter.enob_bits'],
@@ -36,7 +39,7 @@ function budgetFindings({ budget, s }: Bank): Finding[] {
     `Nothing of the error budget is left for the comparators: ${name} alone takes ${share} % of the power that ${s.plan.converter.enob_bits} effective bits allow; ${remedy}.`, path)]
 }
 
-function windowFindings({ positions, s }: Bank): Finding[] {
+function windowFindings({ positions, s }: Asked): Finding[] {
   const worst = positions.reduce((a, b) => (b.limits.window_s < a.limits.window_s ? b : a))
   if (worst.limits.window_s > 0) return []
   const where = worst.cycle === null ? '' : ` in cycle ${worst.cycle}`
@@ -45,7 +48,7 @@ function windowFindings({ positions, s }: Bank): Finding[] {
     s.kind.architecture === 'flash' ? 'converter.sample_rate_hz' : 'converter.sar.dac_tau_s')]
 }
 
-function ladderFindings({ s, budget }: Bank): Finding[] {
+function ladderFindings({ s, budget }: Asked): Finding[] {
   const { kind, plan } = s
   if (kind.architecture === 'flash') {
     const sigma = kind.flash.ladder_sigma
@@ -134,10 +137,13 @@ function overrideFindings({ s }: Bank, ledger: Result['ledger']): Finding[] {
   })
 }
 
+/** Stops that no latch can mend. */
+export const briefFindings = (asked: Asked): Finding[] => [...budgetFindings(asked), ...windowFindings(asked), ...ladderFindings(asked)]
+
 /** Everything the planner has to say of a finished bank, stops first. */
 export function findingsOf(bank: Bank, ledger: Result['ledger']): Finding[] {
   const all = [
-    ...budgetFindings(bank), ...windowFindings(bank), ...ladderFindings(bank), ...latchFindings(bank), ...drawnFindings(bank),
+    ...briefFindings(bank), ...latchFindings(bank), ...drawnFindings(bank),
     ...limitFindings(bank), ...trimFindings(bank), ...loadFindings(bank), ...overrideFindings(bank, ledger),
   ]
   const order: Severity[] = ['stop', 'caution', 'note']

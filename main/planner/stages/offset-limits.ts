@@ -18,7 +18,9 @@ export function sigmaLimits(s: Situation): { inl: number; dnl: number } {
 /** Largest trim step by yield alone [V]. */
 export function yieldStep(s: Situation, ladderSigma: number): number {
   const { inl_lsb, dnl_lsb } = s.plan.converter
-  return trimStepLimit({ codes: s.codes, deltaV: s.lsb, inlLsb: inl_lsb, inlMethod: inlLine(s), dnlLsb: dnl_lsb, ladderSigma, yieldEach: s.laneYield })
+  return trimStepLimit({
+    codes: s.codes, deltaV: s.lsb, inlLsb: inl_lsb, inlMethod: inlLine(s), dnlLsb: dnl_lsb, ladderSigma, yieldEach: s.laneYield,
+  })
 }
 
 /** Largest trim step of a flash bank [V]: what the yields allow, and step²/12 within the spread's share [V²]. */

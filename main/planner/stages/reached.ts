@@ -89,7 +89,9 @@ export function tightestOf(use: Use): LimitName {
 }
 
 /** The bank: every comparator with its limits, what is reached, and how much of each limit is used. */
-export function comparatorEntries(s: Situation, design: LatchDesign, positions: readonly Position[], evaluated: readonly Evaluated[]): ComparatorEntry[] {
+export function comparatorEntries(
+  s: Situation, design: LatchDesign, positions: readonly Position[], evaluated: readonly Evaluated[],
+): ComparatorEntry[] {
   const known = new Map<string, Reached>()
   return positions.map((position, i) => {
     const { limits, lane, cycle, threshold, commonMode } = position

@@ -1,6 +1,7 @@
 import type { Plan } from '../../contract/plan'
 import type { Finding, Remedy, Result } from '../../contract/result'
 import { formatSi } from '../../contract/units'
+import { unmendable } from './shortfall'
 
 /** A change of the brief that may help, before it is tried. */
 interface Idea { readonly what: string; readonly set: Remedy['set'] }
@@ -13,7 +14,7 @@ const tidy = (value: number): number => Number(value.toPrecision(4))
 const moreLanes = ({ converter }: Plan): Idea[] =>
   converter.architecture === 'flash' ? [2, 4].map((f) => converter.lanes * f).filter((lanes) => lanes <= 64).map((lanes) => one(`${lanes} lanes`, 'converter.lanes', lanes)) : []
 
-const slower = ({ converter }: Plan): Idea[] => [0.75, 0.5, 0.25].map((f) => {
+const slower = ({ converter }: Plan): Idea[] => [0.5, 0.75, 0.25].map((f) => {
   const rate = tidy(converter.sample_rate_hz * f)
   return one(`${formatSi(rate, 'S/s')}`, 'converter.sample_rate_hz', rate)
 })
@@ -41,22 +42,24 @@ const widerLinearity = ({ converter }: Plan): Idea[] => [1.5, 2].map((f) => ({
   set: [{ path: 'converter.inl_lsb', value: tidy(converter.inl_lsb * f) }, { path: 'converter.dnl_lsb', value: tidy(converter.dnl_lsb * f) }],
 }))
 
-const scaled = (plan: Plan, path: string, value: number, factors: readonly number[], say: (v: number) => string): Idea[] =>
+const scaled = (path: string, value: number, factors: readonly number[], say: (v: number) => string): Idea[] =>
   factors.map((f) => tidy(value * f)).map((v) => one(say(v), path, v))
 
 const largerShare = (plan: Plan, key: 'kick_share' | 'memory_share' | 'dac_load_share', name: string, unit: string): Idea[] =>
-  scaled(plan, `budget.${key}`, plan.budget[key], [1.5, 2.5], (v) => `a ${name} of ${v}${unit}`)
+  scaled(`budget.${key}`, plan.budget[key], [1.5, 2.5], (v) => `a ${name} of ${v}${unit}`)
 
 function largerCapacitance(plan: Plan): Idea[] {
   const { converter } = plan
   return converter.architecture === 'flash'
-    ? scaled(plan, 'converter.flash.sampling_cap_f', converter.flash!.sampling_cap_f, [2, 4], (v) => `a sampling capacitor of ${formatSi(v, 'F')}`)
-    : scaled(plan, 'converter.sar.unit_cap_f', converter.sar!.unit_cap_f, [2, 4], (v) => `unit capacitors of ${formatSi(v, 'F')}`)
+    ? scaled('converter.flash.sampling_cap_f', converter.flash!.sampling_cap_f, [2, 4], (v) => `a sampling capacitor of ${formatSi(v, 'F')}`)
+    : scaled('converter.sar.unit_cap_f', converter.sar!.unit_cap_f, [2, 4], (v) => `unit capacitors of ${formatSi(v, 'F')}`)
 }
 
 function betterElements({ converter }: Plan): Idea[] {
-  const [path, value] = converter.architecture === 'flash' ? ['converter.flash.ladder_sigma', converter.flash!.ladder_sigma] : ['converter.sar.unit_cap_sigma', converter.sar!.unit_cap_sigma]
-  return [0.5, 0.25].map((f) => tidy((value as number) * f)).map((v) => one(`elements that match to ${formatSi(v * 100, '%')}`, path as string, v))
+  const flash = converter.architecture === 'flash'
+  const path = flash ? 'converter.flash.ladder_sigma' : 'converter.sar.unit_cap_sigma'
+  const value = flash ? converter.flash!.ladder_sigma : converter.sar!.unit_cap_sigma
+  return [0.5, 0.25].map((f) => tidy(value * f)).map((v) => one(`elements that match to ${formatSi(v * 100, '%')}`, path, v))
 }
 
 const lighterLadder = ({ converter }: Plan): Idea[] => (converter.architecture === 'flash'
@@ -66,7 +69,7 @@ const biggerBankShare = ({ converter }: Plan): Idea[] => (converter.architecture
   ? [2].map((f) => tidy(converter.flash!.bank_share * f)).map((v) => one(`a bank share of ${v}`, 'converter.flash.bank_share', v)) : [])
 
 const ideasByCode: Record<string, (plan: Plan) => Idea[]> = {
-  time_over_limit: (p) => [...moreLatches(p), ...moreLanes(p), ...slower(p), ...higherCommonMode(p), ...relaxedErrors(p)],
+  time_over_limit: (p) => [...moreLanes(p), ...moreLatches(p), ...slower(p), ...higherCommonMode(p), ...relaxedErrors(p)],
   window_negative: (p) => [...moreLanes(p), ...slower(p)],
   latch_too_slow: (p) => [...higherCommonMode(p), ...slower(p)],
   latch_no_regeneration: (p) => higherCommonMode(p),
@@ -81,8 +84,13 @@ const ideasByCode: Record<string, (plan: Plan) => Idea[]> = {
   trim_range: (p) => [...fewerBits(p), ...widerLinearity(p)],
 }
 
-const mostTries = 8
 const wanted = 3
+/** Tries that size a latch; those refused by the brief alone cost nothing. */
+const mostTries = 14
+const mostChanges = 4
+/** How many of the best incomplete changes are built upon. */
+const keptOpen = 2
+const ideasAStep = 7
 
 /** Puts a value at a dotted path of a copy of the plan. */
 function withValue(plan: Plan, path: string, value: unknown): Plan {
@@ -93,28 +101,61 @@ function withValue(plan: Plan, path: string, value: unknown): Plan {
 
 export const applied = (plan: Plan, set: Remedy['set']): Plan => set.reduce((changed, { path, value }) => withValue(changed, path, value), plan)
 
-/** Ideas of all stops, taken in turn, each once; the first of every stop before the second of any. */
-function ideasFor(plan: Plan, stops: readonly Finding[]): Idea[] {
-  const lists = stops.map((stop) => ideasByCode[stop.code]?.(plan) ?? [])
+const both = (a: Idea, b: Idea): Idea => ({ what: a.what === '' ? b.what : `${a.what}, ${b.what}`, set: [...a.set, ...b.set] })
+const touchesSame = (a: Idea, b: Idea): boolean => a.set.some(({ path }) => b.set.some((other) => other.path === path))
+
+/** Ideas for the stops of a plan, the first of every stop before the second of any; each once. */
+function ideasFor(plan: Plan, codes: readonly string[]): Idea[] {
+  const lists = codes.map((code) => ideasByCode[code]?.(plan) ?? [])
   const longest = Math.max(0, ...lists.map((list) => list.length))
   const mixed = Array.from({ length: longest }, (_, i) => lists.flatMap((list) => list.slice(i, i + 1))).flat()
   const seen = new Set<string>()
-  return mixed.filter((idea) => !seen.has(JSON.stringify(idea.set)) && seen.add(JSON.stringify(idea.set)))
+  return mixed.filter(({ set }) => !seen.has(JSON.stringify(set)) && seen.add(JSON.stringify(set)))
+}
+
+/** What the search for remedies asks of the planner. */
+export interface Replanner {
+  /** 0: a latch that meets everything is found; else how far off the plan is. */
+  readonly shortfall: (plan: Plan) => number
+  readonly replan: (plan: Plan) => Result
+}
+
+const stopsOf = (result: Result): Finding[] => result.findings.filter((f) => f.severity === 'stop')
+
+interface Open { readonly idea: Idea; readonly shortfall: number }
+
+/** One step of the search: each open change with one more idea; the feasible ones are verified by planning them out. */
+function widen(plan: Plan, open: readonly Idea[], codes: readonly string[], planner: Replanner, found: Remedy[], tries: { left: number }): Open[] {
+  const next: Open[] = []
+  for (const base of open) {
+    const more = ideasFor(applied(plan, base.set), codes).filter((idea) => !touchesSame(base, idea))
+    for (const idea of more.slice(0, ideasAStep)) {
+      if (found.length >= wanted || tries.left <= 0) return next
+      const change = both(base, idea)
+      const shortfall = planner.shortfall(applied(plan, change.set))
+      if (shortfall < unmendable) tries.left--
+      if (shortfall > 0) { next.push({ idea: change, shortfall }); continue }
+      const result = planner.replan(applied(plan, change.set))
+      if (stopsOf(result).length === 0) found.push({ text: `${change.what}: feasible, ${formatSi(result.ledger.power_w, 'W')}`, set: change.set })
+    }
+  }
+  return next
 }
 
 /**
- * Changes that make an infeasible plan feasible, each verified by planning again; attached to every stop.
- * @param plan the infeasible result's plan; @param attempt plans a changed brief and gives its result when nothing stops it
+ * Changes of the brief that make an infeasible plan feasible, each verified by planning again; attached to every stop.
+ * Single changes first; where they do not do, those that come nearest are built upon.
  */
-export function withRemedies(result: Result, attempt: (plan: Plan) => Result | null): Result {
-  const stops = result.findings.filter((f) => f.severity === 'stop')
+export function withRemedies(result: Result, planner: Replanner): Result {
+  const stops = stopsOf(result)
   if (stops.length === 0) return result
+  const codes = stops.map((f) => f.code)
   const found: Remedy[] = []
-  for (const idea of ideasFor(result.plan, stops).slice(0, mostTries)) {
-    const tried = attempt(applied(result.plan, idea.set))
-    if (tried === null) continue
-    found.push({ text: `${idea.what}: feasible, ${formatSi(tried.ledger.power_w, 'W')}`, set: idea.set })
-    if (found.length === wanted) break
+  const tries = { left: mostTries }
+  let open: Idea[] = [{ what: '', set: [] }]
+  for (let changes = 0; changes < mostChanges && found.length < 2 && tries.left > 0; changes++) {
+    const reached = widen(result.plan, open, codes, planner, found, tries)
+    open = reached.sort((a, b) => a.shortfall - b.shortfall).slice(0, keptOpen).map(({ idea }) => idea)
   }
   const remedied = (f: Finding): Finding => (f.severity === 'stop' ? { ...f, remedy: found[0]?.text ?? null, remedies: found } : f)
   return { ...result, findings: result.findings.map(remedied) }

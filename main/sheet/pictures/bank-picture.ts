@@ -14,7 +14,7 @@ const lead = 26
  * The bank: a cell for each comparator, three strokes for time, noise and offset against the dashed limit,
  * tint for the tightest, a notch over a limit. Copper threads them along the ladder, or along time in a SAR.
  */
-export function bankPicture(comparators: readonly ComparatorEntry[], width: number): Picture {
+export function bankPicture(comparators: readonly ComparatorEntry[], width: number): Picture & { strokes: boolean } {
   const sar = comparators[0].cycle !== null
   const rows = sar ? byLane(comparators) : serpentine(comparators, columnsFor(comparators.length, width - 2 * lead))
   const columns = Math.max(...rows.map((row) => row.length))
@@ -22,8 +22,12 @@ export function bankPicture(comparators: readonly ComparatorEntry[], width: numb
   const places = rows.map((row, r) => row.map((entry, c): Place => ({ entry, ...placeOf(grid, r, sar || r % 2 === 0 ? c : columns - 1 - c) })))
   const height = rows.length * (grid.tall + grid.rowGap)
   const thread = sar ? places.map((row) => threadOf([row], grid)) : [threadOf(places, grid)]
-  return { width, height, marks: [...thread, ...places.flat().flatMap((place) => cell(place, grid)), ...rowLabels(places, grid)] }
+  const cells = places.flat().flatMap((place) => cell(place, grid))
+  return { width, height, strokes: hasStrokes(grid), marks: [...thread, ...cells, ...rowLabels(places, grid)] }
 }
+
+/** Cells too small for strokes keep their tint and their notch. */
+const hasStrokes = (grid: Grid): boolean => grid.cell > 11
 
 function columnsFor(total: number, width: number): number {
   if (total <= 20) return total
@@ -53,14 +57,14 @@ function placeOf(grid: Grid, row: number, column: number): { x: number; y: numbe
 function threadOf(rows: readonly (readonly Place[])[], grid: Grid): string {
   const points = rows.flatMap((row) => [row[0], row[row.length - 1]])
     .map(({ x, y }) => `${x + grid.cell / 2},${y + grid.tall + grid.rowGap / 2}`)
-  return path(`M${points.join('L')}`, { stroke: ink.copper, 'stroke-width': grid.cell > 14 ? 1 : 0.6 })
+  return path(`M${points.join('L')}`, { stroke: ink.copper, 'stroke-width': hasStrokes(grid) ? 1 : 0.6 })
 }
 
 function cell({ entry, x, y }: Place, grid: Grid): string[] {
   const worst = entry.tightest === null ? null : entry.use[entry.tightest]
   const over = entry.tightest !== null && (worst === null || worst > 1)
-  const marks = [rect(x, y, grid.cell, grid.tall, tintOf(worst, grid.cell > 14), { stroke: over ? ink.over : ink.rule, 'stroke-width': over ? 0.8 : 0.4 })]
-  if (grid.cell > 14) marks.push(...strokesOf(entry, x, y, grid))
+  const marks = [rect(x, y, grid.cell, grid.tall, tintOf(worst, hasStrokes(grid)), { stroke: over ? ink.over : ink.rule, 'stroke-width': over ? 0.8 : 0.4 })]
+  if (hasStrokes(grid)) marks.push(...strokesOf(entry, x, y, grid))
   if (over) marks.push(notch(x + grid.cell, y, Math.max(2.4, grid.cell * 0.2)))
   return marks
 }

@@ -46,7 +46,7 @@ export function stripPicture(strip: Strip, width: number, height: number): Pictu
 /** From zero, or closer where all values lie close together; then the axis says so by its numbers. */
 function domainOf(values: readonly number[]): [number, number] {
   const [low, high] = [Math.min(...values), Math.max(...values)]
-  if (low > 0.8 * high) return [low - 0.4 * (high - low) - 0.002 * high, high + 0.2 * (high - low)]
+  if (low > 0.8 * high) return [low - Math.max(0.4 * (high - low), 0.04 * high), high + Math.max(0.2 * (high - low), 0.02 * high)]
   return [Math.min(0, low), Math.max(0, high) || 1]
 }
 

@@ -16,11 +16,12 @@ export function bank({ result, width }: SheetContext): Content {
   const sar = comparators[0].cycle !== null
   const order = sar ? 'Copper runs with time, from cycle to cycle.' : 'Copper follows the ladder, from the lowest threshold to the highest.'
   const strip = stripOf(result)
+  const cells = bankPicture(comparators, width)
   const picture: Content = {
     stack: [
       heading('The bank', width, `Tint: the tightest use, from 0.4 of its limit (light) to 1 (dark). Notched corner: over a limit. ${order}`),
-      { svg: svgOf(bankPicture(comparators, width)), margin: [0, 2, 0, 6] },
-      ...(comparators.length > 300 ? [] : [strokeLegend()]),
+      { svg: svgOf(cells), margin: [0, 2, 0, 6] },
+      ...(cells.strokes ? [strokeLegend()] : []),
     ],
     unbreakable: true,
   }

@@ -60,7 +60,9 @@ export interface SearchOptions {
 }
 
 /** One local search over the unknowns with the engine at every step; the spots are the conditions that may bind. */
-export function searchDesign(s: Situation, spots: readonly Spot[], calibration: Calibration, from: LatchDesign, options: SearchOptions): { design: LatchDesign; settled: boolean } {
+export function searchDesign(
+  s: Situation, spots: readonly Spot[], calibration: Calibration, from: LatchDesign, options: SearchOptions,
+): { design: LatchDesign; settled: boolean } {
   const space = unknownSpace(s.card, options.trim)
   const evaluate = (x: Float64Array): Trial => {
     const design = space.toDesign(x)
@@ -79,7 +81,9 @@ export function searchDesign(s: Situation, spots: readonly Spot[], calibration: 
 }
 
 /** The design whose worst use is smallest: one more unknown, the bound on every constraint, is made small. */
-export function nearestDesign(s: Situation, spots: readonly Spot[], calibration: Calibration, from: LatchDesign, options: SearchOptions): LatchDesign {
+export function nearestDesign(
+  s: Situation, spots: readonly Spot[], calibration: Calibration, from: LatchDesign, options: SearchOptions,
+): LatchDesign {
   const space: UnknownSpace = unknownSpace(s.card, options.trim)
   const n = space.lower.length
   let last: { x: Float64Array; values: number[] } | null = null

@@ -15,7 +15,10 @@ const passes = 4
 /** Sizes of the first designs tried, in units of the usual one. */
 const startSizes = [1, 6]
 const usualBits = 5
-const sizesKept = 6
+/** Worst use after the relaxed search above which whole bits will not help, and above which another start will not. */
+const outOfReach = 1.15
+const hopeless = 1.6
+const sizesKept = 24
 
 export interface Sized {
   readonly design: LatchDesign
@@ -61,6 +64,7 @@ function refine(s: Situation, spots: readonly Spot[], from: Candidate, trim: fal
     const { appraisals, calibration } = calibrate(s, design, spots)
     if (calibration === null) return candidate
     candidate = { design, appraisals, calibration }
+    if (worstUse(appraisals) > hopeless) break
     const known = new Set(working.map(spotName))
     const added = appraisals.filter((a) => a.uses.some((use) => use > 1) && !known.has(spotName(a)))
     if (added.length === 0 && (settled || pass > 0)) break
@@ -88,16 +92,21 @@ function bitChoices(s: Situation, relaxed: LatchDesign): (number | false)[] {
   return [below, Math.min(16, below + 1)]
 }
 
-/** Cheapest design that meets everything from one start; null where none is found. */
-function sizeFrom(s: Situation, spots: readonly Spot[], start: Candidate): (Candidate & { trimConverged: boolean }) | null {
+type Built = Candidate & { trimConverged: boolean }
+
+/** Cheapest design that meets everything from one start; where none is found, how far the search stayed from one. */
+function sizeFrom(s: Situation, spots: readonly Spot[], start: Candidate): { found: Built | null; miss: number } {
   const fixed = s.plan.comparator.trim_bits
   const relaxed = refine(s, spots, start, start.design.trim === null ? false : fixed ?? 'free', 1)
+  const miss = worstUse(relaxed.appraisals)
+  if (miss > outOfReach) return { found: null, miss }
   const finished = bitChoices(s, relaxed.design).map((bits) => {
     if (bits === false || fixed !== null) return built(s, spots, relaxed)
     const whole: LatchDesign = { widths: relaxed.design.widths, trim: { bits, unit: relaxed.design.trim!.unit } }
     return built(s, spots, refine(s, spots, { ...relaxed, design: whole }, bits, 0.3))
   }).filter((c) => c.trimConverged && !missed(c))
-  return finished.reduce<(typeof finished)[number] | null>((best, c) => (best === null || costOfCandidate(s, c) < costOfCandidate(s, best) ? c : best), null)
+  const cheaper = (best: Built | null, c: Built) => (best === null || costOfCandidate(s, c) < costOfCandidate(s, best) ? c : best)
+  return { found: finished.reduce<Built | null>(cheaper, null), miss }
 }
 
 function startCandidate(s: Situation, spots: readonly Spot[], demands: readonly Demand[], size: number): Candidate | null {
@@ -117,15 +126,19 @@ function nearest(s: Situation, spots: readonly Spot[], start: Candidate): Sized 
   return { design: finished.design, feasible: false, trimConverged: finished.trimConverged }
 }
 
-/** The cheapest design that meets every limit, from the first start that leads to one; null where none does. */
-export const sizeFeasible = remembering((s: Situation, demands: readonly Demand[]): LatchDesign | null => {
+/** The cheapest design that meets every limit, from the first start that leads to one; else how far the search stayed from one. */
+export const sizeFeasible = remembering((s: Situation, demands: readonly Demand[]): { design: LatchDesign | null; miss: number } => {
   const spots = spotsOf(s, demands)
+  let nearestMiss = Infinity
   for (const size of startSizes) {
     const start = startCandidate(s, spots, demands, size)
-    const found = start === null ? null : sizeFrom(s, spots, start)
-    if (found !== null) return found.design
+    if (start === null) continue
+    const { found, miss } = sizeFrom(s, spots, start)
+    if (found !== null) return { design: found.design, miss: 0 }
+    nearestMiss = Math.min(nearestMiss, miss)
+    if (miss > hopeless) break
   }
-  return null
+  return { design: null, miss: nearestMiss }
 }, (s) => JSON.stringify([s.plan.converter, s.plan.comparator, s.plan.budget, s.plan.corners, s.card]), sizesKept)
 
 /**
@@ -133,7 +146,7 @@ export const sizeFeasible = remembering((s: Situation, demands: readonly Demand[
  * Deterministic: the same plan gives the same design, whatever was planned before.
  */
 export function sizeLatch(s: Situation, demands: readonly Demand[]): Sized {
-  const design = sizeFeasible(s, demands)
+  const { design } = sizeFeasible(s, demands)
   if (design !== null) return { design, feasible: true, trimConverged: true }
   const spots = spotsOf(s, demands)
   const start = startCandidate(s, spots, demands, startSizes[0]) ?? startCandidate(s, spots, demands, startSizes[1])

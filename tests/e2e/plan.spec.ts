@@ -1,0 +1,75 @@
+import { expect, test } from './host'
+import { openWindow, smallFlash, total, type } from './window'
+
+test('the first screen is a worked demo, alive', async ({ page, host }) => {
+  const wire = await openWindow(page, host.url)
+  await wire.settled()
+  await expect(page.getByRole('heading', { level: 1 })).not.toBeEmpty()
+  await expect(total(page, 'power')).toHaveText(/\d.* [mµn]?W/)
+  await expect(page.locator('.bank canvas')).toBeVisible()
+  expect(wire.last()?.reply.ok).toBe(true)
+})
+
+test('the bank and the totals follow the resolution, and undo and redo bring back what was', async ({ page, host }) => {
+  const wire = await openWindow(page, host.url, smallFlash)
+  const grid = page.getByRole('grid', { name: 'Comparators' })
+  await expect(page.getByText('15 comparators along the ladder')).toBeVisible()
+  await wire.settled()
+  const power = await total(page, 'power').textContent()
+  await type(page, 'converter.resolution_bits', '5')
+  await expect(page.getByText('31 comparators along the ladder')).toBeVisible()
+  await expect(total(page, 'power')).not.toHaveText(power ?? '')
+  await grid.press('End')
+  await expect(page.locator('#bank-cell')).toContainText('Comparator 31')
+  await page.keyboard.press('Control+z')
+  await expect(page.getByText('15 comparators along the ladder')).toBeVisible()
+  await expect(total(page, 'power')).toHaveText(power ?? '')
+  await expect(page.getByRole('button', { name: 'Redo “resolution 5 bit”' })).toBeVisible()
+  await page.keyboard.press('Control+Shift+z')
+  await expect(page.getByText('31 comparators along the ladder')).toBeVisible()
+  await expect(page.getByRole('button', { name: 'Undo “resolution 5 bit”' })).toBeVisible()
+})
+
+test('a held arrow key is one step, and the picture stays while planning', async ({ page, host }) => {
+  const wire = await openWindow(page, host.url, smallFlash)
+  await wire.settled()
+  const rate = page.locator('[data-path="converter.sample_rate_hz"]')
+  await rate.focus()
+  for (let step = 0; step < 6; step += 1) {
+    await rate.press('ArrowUp')
+    await expect(page.locator('.bank canvas')).toBeVisible()
+  }
+  await expect(rate).toHaveValue('560 MS/s')
+  await wire.settled()
+  expect(wire.last()?.document.converter.sample_rate_hz).toBe(5.6e8)
+  await page.getByRole('button', { name: 'Undo “sample rate 560 MS/s”' }).click()
+  await wire.settled()
+  expect(wire.last()?.document.converter.sample_rate_hz).toBe(5e8)
+})
+
+test('a line of the ledger takes a figure of the user, and gives it back', async ({ page, host }) => {
+  const wire = await openWindow(page, host.url, smallFlash)
+  await wire.settled()
+  await page.getByRole('button', { name: /^Encoder/ }).first().click()
+  await page.getByRole('button', { name: 'Override', exact: true }).click()
+  await page.getByLabel('Encoder of your own').fill('1.2m')
+  await page.getByLabel('Reason').fill('from synthesis')
+  await page.getByRole('button', { name: 'Set', exact: true }).click()
+  await expect(page.getByRole('button', { name: /^Encoder ?yours/ })).toContainText('1.20 mW')
+  await wire.settled()
+  expect(wire.last()?.document.overrides).toEqual([{ item: 'power.encoder', value: 1.2e-3, reason: 'from synthesis' }])
+  await page.getByRole('button', { name: 'Use the model' }).click()
+  await wire.settled()
+  expect(wire.last()?.document.overrides).toBeUndefined()
+})
+
+test('a limit of the selected comparator opens to its workings', async ({ page, host }) => {
+  const wire = await openWindow(page, host.url, smallFlash)
+  await wire.settled()
+  await page.getByRole('grid', { name: 'Comparators' }).press('Home')
+  const panel = page.getByRole('region', { name: 'Selected comparator' })
+  await expect(panel).toContainText('Comparator 1')
+  await panel.getByRole('button', { name: /^Noise/ }).click()
+  await expect(panel.locator('.working')).not.toHaveCount(0)
+  await expect(panel.locator('.working-formula').first()).not.toBeEmpty()
+})
