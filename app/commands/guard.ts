@@ -9,6 +9,7 @@ export function guarded(app: App, proceed: () => void): void {
 
 /** Puts a document on the desk and forgets what was typed about the last one. */
 export function lay(app: App, open: () => void): void {
-  app.views.patch({ drafts: {}, notice: null, selected: 0, zoom: { scale: 1, x: 0, y: 0 } })
+  const { notice } = app.views.get()
+  app.views.patch({ drafts: {}, notice: notice?.action ? notice : null, selected: 0, zoom: { scale: 1, x: 0, y: 0 } })
   open()
 }

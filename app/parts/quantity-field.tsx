@@ -9,7 +9,7 @@ import { useTyping, type QuantityFieldProps } from './use-typing'
 function atRest({ value, fallback, quantity, draft }: QuantityFieldProps): { text: string; unit: string; isDefault: boolean } {
   if (draft !== undefined) return { text: draft, unit: '', isDefault: false }
   const shown = typeof value === 'number' ? value : fallback
-  if (typeof shown !== 'number') return { text: quantity.nullMeans ? 'auto' : '', unit: quantity.unit, isDefault: true }
+  if (typeof shown !== 'number') return { text: quantity.nullMeans ? 'auto' : '', unit: quantity.nullMeans ? '' : quantity.unit, isDefault: true }
   const [text, unit] = splitFigure(shortFigure(shown, quantity.unit))
   return { text, unit: unit === '' ? quantity.unit : unit, isDefault: typeof value !== 'number' }
 }

@@ -7,6 +7,7 @@ import { restoreRecovery } from '../commands/restore-recovery'
 import type { Files } from '../files/files'
 import { createApp, type App } from './app'
 import { isDirty } from './document-store'
+import { valueAt } from './paths'
 
 const autosaveDelay_ms = 700
 const bare: PlanInput = { schema: 'latchwright.plan/1', converter: { architecture: 'flash', resolution_bits: 6, sample_rate_hz: 2e9 } }
@@ -30,7 +31,8 @@ async function offerRecovery(app: App): Promise<void> {
   const text = await app.files.readRecovery()
   if (text === null) return
   try {
-    const document = JSON.parse(text) as PlanInput
+    const document: unknown = JSON.parse(text)
+    if (!isPlanLike(document)) return app.files.keepRecovery(null)
     const title = document.title ?? 'A plan'
     app.views.patch({ notice: {
       tone: 'note', text: `“${title}” was not saved when the window closed last.`, details: [],
@@ -39,6 +41,11 @@ async function offerRecovery(app: App): Promise<void> {
   } catch {
     app.files.keepRecovery(null)
   }
+}
+
+/** Enough of a plan to be shown and mended; the planner says what is wrong with the rest. */
+function isPlanLike(value: unknown): value is PlanInput {
+  return typeof valueAt(value, 'converter.architecture') === 'string' && !Array.isArray(value)
 }
 
 /** Opens the file the program was started with: the desktop names it in the address, the loopback host hands out its text. */

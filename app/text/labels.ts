@@ -63,21 +63,22 @@ export function splitFigure(text: string): readonly [string, string] {
 
 export const ledgerUnit = (item: string): string => (item.startsWith('power.') ? 'W' : 'm²')
 
-/** "188 of 233 ps": both in the same unit, so that they can be compared by eye. */
+/** Beyond this ratio two values are not read in the same unit. */
+const farApart = 30
+
+/** "188 of 233 ps": both in the same unit, so that they can be compared by eye; "20.1 pV of 7.50 mV" where they are far apart. */
 export function reachedOfLimit(reached: number | null, limit: number | null, unit: string): string {
-  if (limit === null) return reached === null ? '—' : formatSi(reached, unit)
-  if (reached === null) return `— of ${formatSi(limit, unit)}`
-  const bigger = Math.max(Math.abs(reached), Math.abs(limit))
-  const [, shown] = splitFigure(formatSi(bigger, unit))
-  const scale = bigger === 0 ? 1 : Number(splitFigure(formatSi(bigger, unit, 9))[0].replace('−', '-')) / bigger
-  return `${figureAt(reached * scale)} of ${figureAt(limit * scale)} ${shown}`.trim()
+  if (limit === null) return formatSi(reached, unit)
+  const [small, large] = [Math.abs(reached ?? 0), Math.abs(limit)].toSorted((a, b) => a - b)
+  if (reached === null || large > small * farApart) return `${formatSi(reached, unit)} of ${formatSi(limit, unit)}`
+  const [figure, shown] = splitFigure(formatSi(large, unit, 9))
+  const scale = Number(figure) / large
+  return `${figureAt(reached * scale)} of ${figureAt(limit * scale)} ${shown}`
 }
 
 function figureAt(value: number): string {
-  if (value === 0) return '0'
   const size = Math.abs(value)
-  const text = size >= 100 ? value.toFixed(0) : size >= 10 ? value.toFixed(1) : size >= 0.1 ? value.toFixed(2) : value.toPrecision(1)
-  return text.replace('-', '−')
+  return value.toFixed(size >= 99.95 ? 0 : size >= 9.995 ? 1 : 2).replace('-', '−')
 }
 
 /** "104 %", of what is said beside it. */

@@ -17,9 +17,9 @@ export const choices = {
   'converter.flash.encoder': { label: 'Encoder', help: 'Turns the thermometer code into binary.',
     options: { ones_counter: 'Ones counter' } },
   'converter.sar.timing': { label: 'Timing', help: 'Whether a clock or the decisions themselves pace the search.',
-    options: { synchronous: 'Synchronous', self_timed: 'Self-timed' }, later: ['self_timed'] },
+    options: { synchronous: 'Synchronous', self_timed: 'Self-timed' } },
   'converter.sar.comparators': { label: 'Comparators', help: 'One comparator for all cycles, or one for each.',
-    options: { one: 'One', one_per_bit: 'One per bit' }, later: ['one_per_bit'] },
+    options: { one: 'One', one_per_bit: 'One per bit' } },
   'converter.sar.dac_scheme': { label: 'DAC scheme', help: 'How the capacitor array is switched; sets its size and energy.',
     options: { conventional: 'Conventional', split_capacitor: 'Split capacitor', monotonic: 'Monotonic', common_mode_based: 'Common-mode based' } },
   'comparator.topology': { label: 'Topology', help: 'The circuit of the latch.',
@@ -29,7 +29,7 @@ export const choices = {
   'comparator.objective': { label: 'Objective', help: 'What automatic sizing makes small.',
     options: { energy: 'Energy', area: 'Area' } },
   'comparator.offset_method': { label: 'Offset plan', help: 'How the offset is brought under its limit.',
-    options: { size: 'Size', trim: 'Trim', autozero: 'Autozero' }, later: ['autozero'] },
+    options: { size: 'Size', trim: 'Trim', autozero: 'Autozero' } },
 } as const satisfies Record<string, Choice>
 
 export type ChoicePath = keyof typeof choices
@@ -37,18 +37,8 @@ export type ChoicePath = keyof typeof choices
 export const cornerNames = ['typical', 'slow', 'fast'] as const
 export type CornerName = (typeof cornerNames)[number]
 
-/** Values of other fields whose physics is not built yet, beside the options marked `later`. */
-export const laterValues: readonly { path: string; later: (value: unknown, plan: unknown) => boolean; allowed: string; hint: string }[] = [
-  { path: 'converter.flash.front_sampler', later: (v) => v === false, allowed: 'true', hint: 'Plan with a front sampler for now.' },
-  { path: 'converter.sar.redundant_cycles', later: (v) => typeof v === 'number' && v > 0, allowed: '0', hint: 'Plan without redundant cycles for now.' },
-  { path: 'converter.lanes', later: (v, plan) => typeof v === 'number' && v > 1 && architectureOf(plan) === 'sar',
-    allowed: '1 with architecture sar', hint: 'Plan one lane of the SAR for now.' },
-]
-
-function architectureOf(plan: unknown): unknown {
-  const converter = (plan as { converter?: { architecture?: unknown } } | null)?.converter
-  return converter?.architecture
-}
+/** Values of other fields whose physics is not built yet, beside the options marked `later`; none at present. */
+export const laterValues: readonly { path: string; later: (value: unknown, plan: unknown) => boolean; allowed: string; hint: string }[] = []
 
 /** Ledger items in the order in which they are shown; an override names one of these. */
 export const ledgerItems = {

@@ -53,6 +53,16 @@ function resolution(document: unknown, architecture: unknown): Problem[] {
   }]
 }
 
+function redundancy(document: unknown): Problem[] {
+  const path = 'converter.sar.redundant_cycles'
+  const [value, bits] = [at(document, path), at(document, 'converter.resolution_bits')]
+  if (typeof value !== 'number' || typeof bits !== 'number' || value < bits) return []
+  return [{
+    code: 'out_of_range', path, value: shortValue(value), allowed: `a whole number from 0 to ${bits - 1}, fewer than the bits`,
+    hint: 'Plan fewer redundant cycles, or more bits.',
+  }]
+}
+
 function widths(document: unknown): Problem[] {
   if (at(document, 'comparator.sizing') !== 'manual') return []
   const given = at(document, 'comparator.widths')
@@ -84,7 +94,7 @@ function card(document: unknown): Problem[] {
 export function crossCheck(document: unknown): Problem[] {
   const architecture = at(document, 'converter.architecture')
   return [
-    ...resolution(document, architecture), ...widths(document), ...card(document),
+    ...resolution(document, architecture), ...(architecture === 'sar' ? redundancy(document) : []), ...widths(document), ...card(document),
     ...laterOptions(document, architecture), ...laterNumbers(document, architecture),
   ]
 }

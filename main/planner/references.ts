@@ -16,5 +16,7 @@ export const references = {
   liu: 'C.-C. Liu et al., A 10-bit 50-MS/s SAR ADC With a Monotonic Capacitor Switching Procedure, IEEE JSSC 45(4), 2010',
   engine: 'latch engine: linear time-varying analysis along the balanced trajectory, after J. Kim et al., IEEE TCAS-I 56(8), 2009',
   transient: 'latch engine: full nonlinear transient',
+  tail: 'exact tail of the sum of all decision delays over a uniform input, leading order',
+  perBit: 'exact yield integral of a comparator per bit: neighbouring thresholds alternate with the last one',
   exactYield: 'exact yield integral of independent Gaussian thresholds',
 } as const

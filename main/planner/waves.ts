@@ -42,7 +42,7 @@ function tracePhase(circuit: Circuit, from: FullState, options: PhaseOptions, po
 }
 
 /** Where a decision takes longest: the corner that waves are most worth looking at. */
-function slowest(bank: Bank, points: readonly Evaluated[], overdrive: number): Evaluated {
+function slowest(bank: Bank, points: readonly Evaluated[], overdrive: number | null): Evaluated {
   const delay = (p: Evaluated) => attainedAt(bank.s, bank.design, p, overdrive)?.delay ?? Infinity
   return points.reduce((a, b) => (delay(b) > delay(a) ? b : a))
 }
@@ -50,14 +50,16 @@ function slowest(bank: Bank, points: readonly Evaluated[], overdrive: number): E
 /** Lengths of the two clock phases between 50 % crossings [s]. */
 function phaseLengths({ s, positions }: Bank, index: number): { evaluate: number; reset: number } {
   const least = 4 * s.plan.comparator.clock_rise_s
-  const evaluate = s.kind.architecture === 'flash' ? s.kind.evaluateTime : positions[index - 1].limits.window_s
+  const window = positions[index - 1].limits.window_s
+  const share = s.kind.architecture === 'sar' && s.kind.sar.timing === 'self_timed' ? window / s.kind.cycles.length : window
+  const evaluate = s.kind.architecture === 'flash' ? s.kind.evaluateTime : share
   return { evaluate: Math.max(evaluate, least), reset: Math.max(s.kind.resetTime, least) }
 }
 
-/** First time at which both outputs together have fallen by a p threshold: from there the cross-coupled pairs take over. */
+/** First time at which the inner nodes together have fallen by an n threshold: from there the cross-coupled n pair conducts. */
 function takeOver(circuit: Circuit, trace: Trace, threshold: number): number {
   const sides = circuit.sideNodes.length
-  const found = trace.find(({ nodes }) => (nodes[circuit.output] + nodes[sides + circuit.output]) / 2 < circuit.supply - threshold)
+  const found = trace.find(({ nodes }) => (nodes[circuit.inner] + nodes[sides + circuit.inner]) / 2 < circuit.supply - threshold)
   return found === undefined ? trace[trace.length - 1].t : found.t
 }
 
@@ -94,7 +96,7 @@ export function waves(document: Plan, card: Card, options: WavesOptions): Waves 
   const position = bank.positions[options.index - 1]
   if (position === undefined) throw new RangeError(`there is no comparator ${options.index}: the bank has ${bank.positions.length}`)
   const points = bank.evaluated.filter((e) => e.commonMode === position.commonMode)
-  const { condition } = slowest(bank, points, position.limits.overdrive_v!)
+  const { condition } = slowest(bank, points, position.limits.overdrive_v)
   const circuit = circuitOf(bank.s, bank.design, condition, position.commonMode)
   const overdrive = options.overdrive_v ?? bank.s.lsb / 2
   const lengths = phaseLengths(bank, options.index)
@@ -109,7 +111,7 @@ export function waves(document: Plan, card: Card, options: WavesOptions): Waves 
     corner: condition.name,
     columns: ['time_s', 'clock_v', ...circuit.sideNodes.flatMap((name) => [`${name}_pos_v`, `${name}_neg_v`]), ...circuit.sharedNodes.map((name) => `${name}_v`)],
     rows: [...rowsOf(circuit, evaluate.trace, 'rising', 0), ...rowsOf(circuit, reset.trace.slice(1), 'falling', lengths.evaluate)],
-    phases: phasesOf(circuit, evaluate.trace, lengths, decision.time(), condition.p.threshold),
+    phases: phasesOf(circuit, evaluate.trace, lengths, decision.time(), condition.n.threshold),
     decision_s: decision.time(),
   }
 }

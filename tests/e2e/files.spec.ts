@@ -11,13 +11,13 @@ async function saved(page: Page, keys: string) {
 test('what is saved is what was typed, and opens again as the same plan', async ({ page, host }) => {
   const wire = await openWindow(page, host.url, smallFlash)
   await openPlan(page, smallFlash)
-  await type(page, 'converter.full_scale_v', '2/3*0.9')
+  await type(page, 'converter.full_scale_v', '1/2 * 1.2 V - 0.1')
   await expect(page.getByTestId('saved-state')).toHaveText('not saved')
   const download = await saved(page, 'Control+s')
   expect(download.suggestedFilename()).toBe('test.bank.json')
   await expect(page.getByTestId('saved-state')).toHaveText(/^saved \d\d:\d\d$/)
   const text = (await bytesOf(download)).toString()
-  expect(JSON.parse(text)).toEqual({ ...smallFlash, converter: { ...smallFlash.converter, full_scale_v: 0.6 } })
+  expect(JSON.parse(text)).toEqual({ ...smallFlash, converter: { ...smallFlash.converter, full_scale_v: 0.5 } })
   await type(page, 'converter.resolution_bits', '5')
   await expect(page.getByTestId('saved-state')).toHaveText(/^changed since/)
   await page.keyboard.press('Control+z')
@@ -103,7 +103,10 @@ for (const paper of ['A4', 'Letter']) {
   test(`the sheet comes as a PDF on ${paper}`, async ({ page, host }) => {
     const wire = await openWindow(page, host.url, smallFlash)
     await wire.settled()
-    if (paper === 'Letter') await page.getByRole('button', { name: /^Paper of the sheet/ }).click()
+    if (paper === 'Letter') {
+      await page.getByRole('button', { name: /^Paper of the sheet/ }).click()
+      await page.getByRole('menuitemradio', { name: 'Letter' }).click()
+    }
     const download = await saved(page, 'Control+e')
     expect(download.suggestedFilename()).toMatch(/\.pdf$/)
     const bytes = (await bytesOf(download)).toString('latin1')

@@ -45,7 +45,7 @@ function listen(page: Page): Wire {
     if (!response.url().endsWith('/api/plan.run')) return
     const asked = response.request().postDataJSON() as { document: PlanInput; revision: number }
     const reply = await response.json().catch(() => null) as PlanReply | null
-    if (reply === null || asked.revision < revision) return
+    if (reply === null || asked.revision < revision || (!reply.ok && reply.error.code === 'cancelled')) return
     revision = asked.revision
     newest = { document: asked.document, reply }
   })

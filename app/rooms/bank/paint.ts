@@ -90,7 +90,7 @@ function paintNotch(context: CanvasRenderingContext2D, palette: Palette, { x, y,
 }
 
 function frameOf({ x, y, w, h }: Box, head: number): Box {
-  const edge = w < 40 ? 2.5 : 3.5
+  const edge = w < 40 ? 2 : 2.5
   return { x: x + edge, y: y + head, w: w - 2 * edge, h: h - head - edge }
 }
 

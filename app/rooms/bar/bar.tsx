@@ -1,5 +1,4 @@
 import { Button } from 'react-aria-components'
-import { choosePaper } from '../../commands/choose-paper'
 import { run } from '../../commands/command'
 import { CommandButton } from '../../parts/command-button'
 import { exportSheet } from '../../commands/export-sheet'
@@ -13,7 +12,7 @@ import { undo } from '../../commands/undo'
 import { Icon } from '../../parts/icon'
 import { isDirty } from '../../state/document-store'
 import { useApp, useStore } from '../../state/use-store'
-import { NewMenu, PlanMenu } from './menus'
+import { NewMenu, PaperMenu, PlanMenu } from './menus'
 
 /** Title and state of the plan, and what can be done with it as a whole. */
 export function Bar() {
@@ -75,15 +74,11 @@ function UndoButtons() {
 
 function Sheet() {
   const app = useApp()
-  const paper = useStore(app.views, (state) => state.paper)
   const busy = useStore(app.views, (state) => state.busy)
   const ready = useStore(app.results, (state) => state.result !== null)
   return (
     <span className="sheet" role="group" aria-label="Sheet">
-      <Button className="button paper" aria-label={`Paper of the sheet: ${paper === 'A4' ? 'A4' : 'Letter'}; change`}
-        onPress={() => run(app, choosePaper, { paper: paper === 'A4' ? 'LETTER' : 'A4' })}>
-        {paper === 'A4' ? 'A4' : 'Letter'}
-      </Button>
+      <PaperMenu />
       <CommandButton command={exportSheet} argument={undefined} look="primary" disabled={!ready || busy !== null}>
         {busy ?? exportSheet.label}
       </CommandButton>

@@ -1,4 +1,5 @@
 import { Button, Header, Menu, MenuItem, MenuSection, MenuTrigger, Popover, Separator } from 'react-aria-components'
+import { choosePaper } from '../../commands/choose-paper'
 import { run, type Command } from '../../commands/command'
 import { newFromDemo } from '../../commands/new-from-demo'
 import { openPlan } from '../../commands/open-plan'
@@ -24,6 +25,25 @@ export function NewMenu() {
             <Header className="heading">From a worked example</Header>
             {demos.map((demo) => <MenuItem key={demo.id} id={demo.id} className="option">{demo.title}</MenuItem>)}
           </MenuSection>
+        </Menu>
+      </Popover>
+    </MenuTrigger>
+  )
+}
+
+const papers = { A4: 'A4', LETTER: 'Letter' } as const
+
+/** Chooses the paper of the sheet. */
+export function PaperMenu() {
+  const app = useApp()
+  const paper = useStore(app.views, (state) => state.paper)
+  return (
+    <MenuTrigger>
+      <Button className="button paper" aria-label={`Paper of the sheet: ${papers[paper]}`}>{papers[paper]}<Icon shape="down" /></Button>
+      <Popover className="popover" placement="bottom end">
+        <Menu className="menu small-menu" selectionMode="single" selectedKeys={[paper]}
+          onAction={(key) => run(app, choosePaper, { paper: key === 'LETTER' ? 'LETTER' : 'A4' })}>
+          {Object.entries(papers).map(([key, name]) => <MenuItem key={key} id={key} className="option">{name}</MenuItem>)}
         </Menu>
       </Popover>
     </MenuTrigger>

@@ -19,7 +19,6 @@ export function Below() {
   const app = useApp()
   const tab = useStore(app.views, (state) => state.tab)
   const findings = useStore(app.results, (state) => state.result?.findings.length ?? 0)
-  const Room = rooms[tab]
   return (
     <section className="below" aria-label="Rooms below the bank" data-room="below">
       <Splitter />
@@ -31,7 +30,10 @@ export function Below() {
             </TabHandle>
           ))}
         </TabList>
-        <TabPanel id={tab} className="tab-panel scroll"><Room /></TabPanel>
+        {(Object.keys(rooms) as Tab[]).map((key) => {
+          const Room = rooms[key]
+          return <TabPanel key={key} id={key} className="tab-panel scroll"><Room /></TabPanel>
+        })}
       </Tabs>
     </section>
   )

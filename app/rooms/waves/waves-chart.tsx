@@ -4,6 +4,7 @@ import type { Waves } from '../../../main/contract/waves'
 import { formatSi } from '../../../main/contract/units'
 import { ticksOf } from '../../charts/ticks'
 import { lineStyles, thinned } from './columns'
+import { isNamed } from './phases'
 
 const drawnPoints = 600
 
@@ -24,7 +25,7 @@ export function WavesChart({ waves, name }: { waves: Waves; name: string }) {
       <LineChart data={data} margin={{ top: 18, right: 12, bottom: 2, left: 0 }} accessibilityLayer title={`Waves of ${name}`}>
         {waves.phases.map((phase, index) => (
           <ReferenceArea key={index} x1={Math.max(from, phase.from_s)} x2={Math.min(to, phase.to_s)} fill={`var(--wash-${phase.name})`} fillOpacity={1} stroke="none" ifOverflow="hidden">
-            {phase.to_s - phase.from_s > (to - from) * 0.08 && <Label value={phase.name} position="top" className="phase-name" offset={4} />}
+            {isNamed(waves, phase) && <Label value={phase.name} position="top" className="phase-name" offset={4} />}
           </ReferenceArea>
         ))}
         <CartesianGrid vertical={false} stroke="var(--rule)" strokeDasharray="2 4" />

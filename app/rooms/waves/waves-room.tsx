@@ -9,6 +9,7 @@ import { lowered } from '../../text/labels'
 import { nameOf } from '../bank/describe'
 import { lineStyles, tableOf } from './columns'
 import { Overdrive } from './overdrive'
+import { isNamed } from './phases'
 import { WavesChart } from './waves-chart'
 
 /** The transient of the selected comparator. */
@@ -45,6 +46,9 @@ function Key({ waves }: { waves: Waves | null }) {
           </svg>
           {lineStyles[column].label}
         </li>
+      ))}
+      {waves.phases.filter((phase) => !isNamed(waves, phase) && phase.name !== 'reset').map((phase) => (
+        <li key={phase.name}><span className="phase-swatch" style={{ background: `var(--wash-${phase.name})` }} />{phase.name}</li>
       ))}
       <li>{waves.corner}</li>
       {waves.decision_s !== null && <li>decided at <span className="figure">{formatSi(waves.decision_s, 's')}</span></li>}

@@ -38,8 +38,11 @@ export function cycleEnergy(circuit: Circuit, evaluated: FullState, tau: number)
   return { charge, energy: circuit.supply * charge + circuit.clockGates * circuit.supply ** 2 }
 }
 
-/** Differences of the side nodes before the next decision, and what they weigh at the input [V]. */
-export interface Leftover { readonly differences: readonly number[]; readonly atInput: number }
+/**
+ * Differences of the side nodes before the next decision, what they weigh at the input together, and at most: the parts of
+ * X and O often cancel, and a design must not live from that [V].
+ */
+export interface Leftover { readonly differences: readonly number[]; readonly atInput: number; readonly atMost: number }
 
 /**
  * What a decision leaves at the input of the next one [V]: differences of the side nodes half a clock rise before the
@@ -53,7 +56,9 @@ export function leftoverAtInput(circuit: Circuit, decided: FullState, resetTime:
   const sides = circuit.sideNodes.length
   const left = (nodes: Float64Array): Leftover => {
     const differences = startWeight.map((_, i) => nodes[i] - nodes[sides + i])
-    return { differences, atInput: Math.abs(differences.reduce((sum, value, i) => sum + startWeight[i] * value, 0)) }
+    const parts = differences.map((value, i) => startWeight[i] * value)
+    const sum = (values: readonly number[]) => values.reduce((total, value) => total + value, 0)
+    return { differences, atInput: Math.abs(sum(parts)), atMost: sum(parts.map(Math.abs)) }
   }
   if (until <= -circuit.clockRise / 2) return left(decided.nodes)
   const gone = 1e-10 * circuit.supply

@@ -1,4 +1,4 @@
-import { invertPositive, quadraticStep, type Row } from './quadratic'
+import { quadraticStep, type Row } from './quadratic'
 
 /** Objective and constraints (met when ≤ 0) at a point. */
 export interface Trial { readonly objective: number; readonly constraints: readonly number[] }
@@ -89,8 +89,7 @@ export function minimiseConstrained(problem: ConstrainedProblem, start: Float64A
   let radius = problem.firstRadius
   let settled = false
   for (let round = 0; round < problem.iterations && radius > problem.smallestRadius; round++) {
-    const inverse = invertPositive(hessian)
-    const solve = (offsets: readonly number[]) => quadraticStep(inverse, model.gradient, [
+    const solve = (offsets: readonly number[]) => quadraticStep(hessian, model.gradient, [
       ...offsets.map((offset, k) => ({ a: model.jacobian[k], offset, price: problem.price })), ...boxRows(problem, x, radius),
     ])
     const { d, multipliers } = solve(trial.constraints)

@@ -1,65 +1,123 @@
 /** A linear row a·d + offset ≤ 0 of a quadratic step, violated at a price per unit (Infinity: never). */
 export interface Row { readonly a: Float64Array; readonly offset: number; readonly price: number }
 
-/** Inverse of a small symmetric positive definite matrix by Cholesky factors. @throws RangeError when it is not one */
-export function invertPositive(matrix: readonly Float64Array[]): Float64Array[] {
-  const n = matrix.length
-  const l = matrix.map(() => new Float64Array(n))
+/** Solves M·x = r for a small symmetric positive definite M by Cholesky factors; M is overwritten. */
+function solvePositive(m: readonly Float64Array[], r: Float64Array): Float64Array {
+  const n = m.length
   for (let i = 0; i < n; i++) {
     for (let j = 0; j <= i; j++) {
-      let sum = matrix[i][j]
-      for (let k = 0; k < j; k++) sum -= l[i][k] * l[j][k]
-      if (i === j && !(sum > 0)) throw new RangeError('invertPositive: the matrix is not positive definite')
-      l[i][j] = i === j ? Math.sqrt(sum) : sum / l[j][j]
+      let sum = m[i][j]
+      for (let k = 0; k < j; k++) sum -= m[i][k] * m[j][k]
+      m[i][j] = i === j ? Math.sqrt(Math.max(sum, 1e-300)) : sum / m[j][j]
     }
   }
-  return matrix.map((_, column) => {
-    const x = new Float64Array(n)
-    for (let i = 0; i < n; i++) {
-      let sum = i === column ? 1 : 0
-      for (let k = 0; k < i; k++) sum -= l[i][k] * x[k]
-      x[i] = sum / l[i][i]
-    }
-    for (let i = n - 1; i >= 0; i--) {
-      let sum = x[i]
-      for (let k = i + 1; k < n; k++) sum -= l[k][i] * x[k]
-      x[i] = sum / l[i][i]
-    }
-    return x
-  })
+  const x = Float64Array.from(r)
+  for (let i = 0; i < n; i++) {
+    for (let k = 0; k < i; k++) x[i] -= m[i][k] * x[k]
+    x[i] /= m[i][i]
+  }
+  for (let i = n - 1; i >= 0; i--) {
+    for (let k = i + 1; k < n; k++) x[i] -= m[k][i] * x[k]
+    x[i] /= m[i][i]
+  }
+  return x
 }
 
-const sweeps = 400
+const rounds = 60
+const centring = 0.15
+const toBoundary = 0.99
+const close = 1e-10
+
+/** Slack, margin and multiplier of one row; `give` is the slack that is paid for. */
+interface RowState { margin: number; give: number; multiplier: number }
+
+/** Terms of one row in the reduced system: Δλ = (weight·a·Δd + shift). */
+function reduced(row: Row, state: RowState, along: number, target: number): { weight: number; shift: number } {
+  const { margin, give, multiplier } = state
+  const elastic = Number.isFinite(row.price)
+  const rest = row.price - multiplier
+  const residual = give - along - row.offset - margin
+  const scale = margin + (elastic ? (multiplier * give) / rest : 0)
+  const shift = target - multiplier * margin - multiplier * ((elastic ? target / rest - give : 0) + residual)
+  return { weight: multiplier / scale, shift: shift / scale }
+}
+
+const dot = (a: Float64Array, b: Float64Array): number => {
+  let sum = 0
+  for (let i = 0; i < a.length; i++) sum += a[i] * b[i]
+  return sum
+}
+
+/** Mean complementarity of all rows. */
+function gapOf(rows: readonly Row[], states: readonly RowState[]): number {
+  let sum = 0
+  let count = 0
+  rows.forEach((row, k) => {
+    sum += states[k].multiplier * states[k].margin
+    count++
+    if (Number.isFinite(row.price)) { sum += (row.price - states[k].multiplier) * states[k].give; count++ }
+  })
+  return count === 0 ? 0 : sum / count
+}
+
+/** Largest step that keeps value + step·change above zero. */
+const room = (value: number, change: number): number => (change < 0 ? -value / change : Infinity)
 
 /**
- * Step d that minimises ½dᵀBd + gᵀd + Σ price·max(0, a·d + offset), by coordinate ascent on the dual with the
- * multipliers held in [0, price]. C. Hildreth, Naval Research Logistics Quarterly 4, 1957.
+ * Step d that minimises ½dᵀBd + gᵀd + Σ price·max(0, a·d + offset), by a primal-dual interior-point method.
+ * S. Mehrotra, SIAM J. Optim. 2, 1992 (without the corrector); rows with an infinite price are hard.
  *
- * @param inverse B⁻¹;  @returns d and the multipliers of the rows
+ * @returns d and the multipliers of the rows, each in [0, price]
  */
 export function quadraticStep(
-  inverse: readonly Float64Array[], gradient: Float64Array, rows: readonly Row[],
+  b: readonly Float64Array[], gradient: Float64Array, rows: readonly Row[],
 ): { d: Float64Array; multipliers: Float64Array } {
   const n = gradient.length
-  const times = (v: Float64Array) => Float64Array.from(inverse, (row) => row.reduce((sum, value, j) => sum + value * v[j], 0))
-  const d = times(gradient).map((value) => -value)
-  const moved = rows.map((row) => times(row.a))
-  const curvature = rows.map((row, k) => row.a.reduce((sum, value, j) => sum + value * moved[k][j], 0))
-  const multipliers = new Float64Array(rows.length)
-  for (let sweep = 0; sweep < sweeps; sweep++) {
-    let change = 0
-    for (let k = 0; k < rows.length; k++) {
-      if (curvature[k] < 1e-14) continue
-      let value = rows[k].offset
-      for (let j = 0; j < n; j++) value += rows[k].a[j] * d[j]
-      const next = Math.min(rows[k].price, Math.max(0, multipliers[k] + value / curvature[k]))
-      const delta = next - multipliers[k]
-      if (delta === 0) continue
-      multipliers[k] = next
-      for (let j = 0; j < n; j++) d[j] -= delta * moved[k][j]
-      change = Math.max(change, Math.abs(delta) * Math.sqrt(curvature[k]))
-    }
-    if (change < 1e-7) break
+  const d = new Float64Array(n)
+  const states = rows.map((row): RowState => ({
+    margin: Math.max(1, Math.abs(row.offset)) * 0.5,
+    give: Number.isFinite(row.price) ? 0.5 : 0,
+    multiplier: Number.isFinite(row.price) ? row.price / 2 : 1,
+  }))
+  for (let round = 0; round < rounds; round++) {
+    const gap = gapOf(rows, states)
+    const target = centring * gap
+    const along = rows.map((row) => dot(row.a, d))
+    const terms = rows.map((row, k) => reduced(row, states[k], along[k], target))
+    const matrix = b.map((line) => Float64Array.from(line))
+    const right = Float64Array.from(gradient, (value, i) => -value - dot(b[i], d))
+    rows.forEach(({ a }, k) => {
+      for (let i = 0; i < n; i++) {
+        right[i] -= a[i] * (states[k].multiplier + terms[k].shift)
+        for (let j = 0; j < n; j++) matrix[i][j] += terms[k].weight * a[i] * a[j]
+      }
+    })
+    const change = solvePositive(matrix, right)
+    const moves = rows.map((row, k) => moveOf(row, states[k], terms[k], along[k], dot(row.a, change), target))
+    const step = Math.min(1, toBoundary * Math.min(...moves.map((move) => move.longest)))
+    for (let i = 0; i < n; i++) d[i] += step * change[i]
+    moves.forEach((move, k) => {
+      states[k].margin += step * move.margin
+      states[k].give += step * move.give
+      states[k].multiplier += step * move.multiplier
+    })
+    if (gap < close && step > 0.5) break
   }
-  return { d, multipliers }
+  return { d, multipliers: Float64Array.from(states, (state) => state.multiplier) }
+}
+
+/** Changes of a row's state for a change of a·d, and how far they may go. */
+function moveOf(
+  row: Row, state: RowState, term: { weight: number; shift: number }, along: number, change: number, target: number,
+): RowState & { longest: number } {
+  const multiplier = term.weight * change + term.shift
+  const elastic = Number.isFinite(row.price)
+  const rest = row.price - state.multiplier
+  const give = elastic ? (target - rest * state.give + state.give * multiplier) / rest : 0
+  const margin = give - change + (state.give - along - row.offset - state.margin)
+  const longest = Math.min(
+    room(state.margin, margin), room(state.multiplier, multiplier),
+    elastic ? room(state.give, give) : Infinity, elastic ? room(rest, -multiplier) : Infinity,
+  )
+  return { multiplier, give, margin, longest }
 }

@@ -1,5 +1,5 @@
 import { allowedErrorPower, jitterPower, quantisationPower, referencePower, samplingPower } from '../models/budget/error-power'
-import type { Situation } from './situation'
+import { heldCapacitance, offsetOnlyShifts, type Situation } from './situation'
 
 /** The error power, item by item [V²]; `remainder` is what comparator noise and threshold spread share. */
 export interface ErrorBudget {
@@ -22,11 +22,12 @@ export function errorBudget(s: Situation): ErrorBudget {
   const allowed = allowedErrorPower(s.fullScale, converter.enob_bits)
   const quantisation = quantisationPower(s.lsb)
   const jitter = jitterPower(s.inputFrequency, converter.jitter_s, s.fullScale)
-  const sampling = samplingPower(s.hottest, s.kind.architecture === 'flash' ? s.kind.flash.sampling_cap_f : s.kind.arrayCap)
+  const held = heldCapacitance(s)
+  const sampling = held === null ? 0 : samplingPower(s.hottest, held)
   const sigma = s.kind.architecture === 'flash' ? s.kind.flash.ladder_sigma : s.kind.sar.unit_cap_sigma
   const reference = referencePower(s.lsb, sigma, s.codes)
   const remainder = allowed - quantisation - jitter - sampling - reference
-  const noiseShare = s.kind.architecture === 'sar' ? 1 : budget.noise_share
+  const noiseShare = offsetOnlyShifts(s) ? 1 : budget.noise_share
   return {
     allowed, quantisation, jitter, sampling, reference, remainder, noiseShare,
     noisePower: Math.max(0, noiseShare * remainder),

@@ -13,7 +13,7 @@ interface Held { readonly point: Evaluated; readonly reached: Attained; readonly
 function heldAt(bank: Bank, condition: Condition): Held[] | null {
   const held = bank.demands.map(({ commonMode, limits }) => {
     const point = bank.evaluated.find((e) => e.condition === condition && e.commonMode === commonMode)!
-    const reached = attainedAt(bank.s, bank.design, point, limits.overdrive_v!)
+    const reached = attainedAt(bank.s, bank.design, point, limits.overdrive_v)
     if (reached === null) return null
     return { point, reached, uses: pairsOf(limits, reached).map(([value, limit]) => (limit > 0 ? value / limit : Infinity)) }
   })

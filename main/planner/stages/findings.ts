@@ -5,8 +5,8 @@ import { droopCapacitance } from '../models/input/load'
 import { tapVariance } from '../models/offset/mismatch'
 import { sarDacSigmaLimit } from '../models/yield/successive'
 import type { Bank } from './bank'
-import { offsetPart } from './limits-flash'
-import { sigmaLimits } from './offset-limits'
+import { offsetPart, sigmaLimits } from './offset-limits'
+import { heldCapacitance } from './situation'
 import { limitKeys } from './uses'
 
 type Severity = Finding['severity']
@@ -54,7 +54,7 @@ function ladderFindings({ s, budget }: Asked): Finding[] {
     const sigma = kind.flash.ladder_sigma
     const yields = sigmaLimits(s)
     const eaten = tapVariance(s.lsb, sigma, s.codes, s.codes / 2) >= yields.inl ** 2 || (s.lsb * sigma) ** 2 / 2 >= yields.dnl ** 2
-    return eaten && offsetPart(s.lanes) * budget.spreadPower > 0 ? [finding('stop', 'ladder_exhausts_offset',
+    return eaten && offsetPart(s) * budget.spreadPower > 0 ? [finding('stop', 'ladder_exhausts_offset',
       `The ladder's own spread of ${formatSi(sigma * 100, '%')} per element uses up the whole INL or DNL yield: nothing is left for the comparators. Plan better matched elements or wider INL and DNL limits.`,
       'converter.flash.ladder_sigma')] : []
   }
@@ -65,11 +65,13 @@ function ladderFindings({ s, budget }: Asked): Finding[] {
 }
 
 function loadFindings({ s }: Bank): Finding[] {
-  const { kind, plan } = s
-  const [cap, path] = kind.architecture === 'flash' ? [kind.flash.sampling_cap_f, 'converter.flash.sampling_cap_f'] : [kind.arrayCap, 'converter.sar.unit_cap_f']
-  const allowed = droopCapacitance(plan.converter.input_attenuation_db, s.inputFrequency, plan.converter.source_ohm)
-  return cap > allowed ? [finding('caution', 'source_droop',
-    `${formatSi(cap, 'F')} on each side makes the source droop by more than ${plan.converter.input_attenuation_db} dB at ${formatSi(s.inputFrequency, 'Hz')}; at most ${formatSi(allowed, 'F')} would not.`, path)] : []
+  const { input_attenuation_db, source_ohm } = s.plan.converter
+  const cap = heldCapacitance(s)
+  const path = s.kind.architecture === 'flash' ? 'converter.flash.sampling_cap_f' : 'converter.sar.unit_cap_f'
+  const allowed = droopCapacitance(input_attenuation_db, s.inputFrequency, source_ohm)
+  const [held, at] = [formatSi(cap, 'F'), formatSi(s.inputFrequency, 'Hz')]
+  return cap !== null && cap > allowed ? [finding('caution', 'source_droop',
+    `${held} on each side makes the source droop by more than ${input_attenuation_db} dB at ${at}; at most ${formatSi(allowed, 'F')} would not.`, path)] : []
 }
 
 function drawnFindings({ s, design }: Bank): Finding[] {

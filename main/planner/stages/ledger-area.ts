@@ -41,6 +41,12 @@ function logicArea(bank: Bank, item: LedgerItem, count: number, model: string): 
   return line(item, bank.s.lanes * count * gate_area_m2, model, `${n(bank.s.lanes)} * ${n(count)} * ${n(gate_area_m2)}`)
 }
 
+function ladderArea({ s }: Bank, ladders: number): DraftLine {
+  const { gate_area_m2 } = s.card.logic
+  return line('area.ladder', ladders * s.codes * gate_area_m2, 'one gate area per element of every ladder: a place holder until the resistor is known',
+    `${n(ladders)} * ${n(s.codes)} * ${n(gate_area_m2)}`)
+}
+
 function capacitorArea(bank: Bank, item: LedgerItem, perSide: number): DraftLine {
   const density = bank.s.card.cap.dac_f_m2
   return line(item, (bank.s.lanes * 2 * perSide) / density, 'both sides of every lane at the capacitor density', `${n(bank.s.lanes)} * 2 * ${n(perSide)} / ${n(density)}`)
@@ -54,8 +60,8 @@ function flashLines(bank: Bank, { flash }: FlashSituation): DraftLine[] {
       logicArea(bank, 'area.capture', gates.captureLatch * flash.capture_latches * (s.codes - 1), 'gates × gate area, every lane')]),
     logicArea(bank, 'area.encoder', gates.fullAdder * onesCounterAdders(s.codes, s.bits), 'gates × gate area, every lane'),
     clockArea(bank),
-    logicArea(bank, 'area.ladder', s.codes, 'one gate area per element, every lane: a place holder until the resistor is known'),
-    capacitorArea(bank, 'area.sampler', flash.sampling_cap_f),
+    ladderArea(bank, flash.front_sampler ? s.lanes : 1),
+    ...(flash.front_sampler ? [capacitorArea(bank, 'area.sampler', flash.sampling_cap_f)] : []),
   ]
 }
 

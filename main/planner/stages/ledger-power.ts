@@ -8,7 +8,8 @@ import {
   activity, clockPower, clockWirePerLength, dacPower, driverPower, gates, ladderPower, leakagePower, logicPower, onesCounterAdders,
 } from '../models/ledger/power'
 import type { Bank } from './bank'
-import { drawnDevices } from './design'
+import { designInputCap, drawnDevices } from './design'
+import { bankCount } from './limits-flash'
 import { comparatorArea, trimArea } from './sizing/cost'
 import type { FlashSituation, SarSituation } from './situation'
 
@@ -76,11 +77,12 @@ function logicLine(bank: Bank, item: LedgerItem, count: number, active: number, 
   }
 }
 
-function flashLines(bank: Bank, { flash }: FlashSituation, condition: Condition): DraftLine[] {
+function flashLines(bank: Bank, kind: FlashSituation, condition: Condition): DraftLine[] {
   const { s } = bank
+  const { flash } = kind
   const adders = onesCounterAdders(s.codes, s.bits)
   const captured = gates.captureLatch * flash.capture_latches * (s.codes - 1)
-  const ladders = s.lanes
+  const ladders = flash.front_sampler ? s.lanes : 1
   return [
     comparatorsLine(bank, condition),
     ...(flash.capture_latches === 0 ? [] : [
@@ -89,11 +91,11 @@ function flashLines(bank: Bank, { flash }: FlashSituation, condition: Condition)
     clockLine(bank, condition),
     {
       item: 'power.ladder', value: ladders * ladderPower(condition.supply, s.fullScale, flash.ladder_ohm),
-      model: 'one ladder per lane across full scale, fed from the supply: V_DD·V_FS/R',
+      model: `${flash.front_sampler ? 'one ladder per lane' : 'one ladder for all'} across full scale, fed from the supply: V_DD·V_FS/R`,
       numbers: `${n(ladders)} * ${n(condition.supply)} * ${n(s.fullScale)} / ${n(flash.ladder_ohm)}`,
     },
     leakageLine(bank, condition),
-    driverLine(bank, flash.sampling_cap_f, condition),
+    driverLine(bank, flash.front_sampler ? flash.sampling_cap_f : bankCount(s, kind) * designInputCap(s, bank.design), condition),
   ]
 }
 

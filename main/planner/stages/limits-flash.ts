@@ -1,5 +1,5 @@
-import { sigmaLimits, trimLimit } from './offset-limits'
-import { droopCapacitance, feedthroughCapacitance, skewBetweenLanes } from '../models/input/load'
+import { offsetPart, sigmaLimits, trimLimit } from './offset-limits'
+import { droopCapacitance, feedthroughCapacitance, skewAtLevel, skewBetweenLanes } from '../models/input/load'
 import { tapVariance } from '../models/offset/mismatch'
 import { metastableOverdrive, neededOverdrive, tauLimit } from '../models/timing/metastability'
 import type { ErrorBudget } from './budget'
@@ -27,18 +27,31 @@ export function bankCapacitances(s: Situation, { flash }: FlashSituation): { sam
   }
 }
 
-/** The part of the spread share that offsets may use: all of it, ¾ where skew has a quarter. */
-export const offsetPart = (lanes: number): number => (lanes > 1 ? 0.75 : 1)
+/** Comparators that one ladder serves: of its lane with a front sampler, of all lanes without. */
+export const bankCount = (s: Situation, { flash }: FlashSituation): number => (s.codes - 1) * (flash.front_sampler ? 1 : s.lanes)
 
-/** Limits of every comparator of a flash with a front sampler, lane by lane, lowest threshold first. */
-export function flashPositions(s: Situation, flash: FlashSituation, budget: ErrorBudget): Position[] {
+/** Input capacitance that one comparator may have per side [F]. */
+function inputCapLimit(s: Situation, kind: FlashSituation): number {
+  const caps = bankCapacitances(s, kind)
+  return Math.min(kind.flash.front_sampler ? caps.sampler : caps.source, caps.ladder) / bankCount(s, kind)
+}
+
+/** Skew to hand on [s]: between lanes, and at each tap where no front sampler holds the signal; null where neither applies. */
+function skewLimit(s: Situation, { flash }: FlashSituation, budget: ErrorBudget, level: number): number | null {
+  const error = Math.sqrt(budget.spreadPower / 4)
+  const lanes = s.lanes > 1 ? skewBetweenLanes(error, s.inputFrequency, s.fullScale) : null
+  if (flash.front_sampler) return lanes
+  return Math.min(lanes ?? Infinity, skewAtLevel(error, s.inputFrequency, s.fullScale, level))
+}
+
+/** Limits of every comparator of a flash, lane by lane, lowest threshold first. */
+export function flashPositions(s: Situation, kind: FlashSituation, budget: ErrorBudget): Position[] {
   const { plan, lsb, codes } = s
-  const window = flashWindow(s, flash)
-  const overdrive = flashOverdrive(s, flash)
+  const window = flashWindow(s, kind)
+  const overdrive = flashOverdrive(s, kind)
   const yields = sigmaLimits(s)
-  const spread = offsetPart(s.lanes) * budget.spreadPower
-  const ladder = flash.flash.ladder_sigma
-  const caps = bankCapacitances(s, flash)
+  const spread = offsetPart(s) * budget.spreadPower
+  const ladder = kind.flash.ladder_sigma
   const common = {
     window_s: window,
     overdrive_v: overdrive,
@@ -46,14 +59,14 @@ export function flashPositions(s: Situation, flash: FlashSituation, budget: Erro
     integration_s: plan.budget.integration_share * window,
     noise_v: Math.sqrt(budget.noisePower),
     trim_step_v: plan.comparator.offset_method === 'trim' ? trimLimit(s, spread) : null,
-    skew_s: s.lanes > 1 ? skewBetweenLanes(Math.sqrt(budget.spreadPower / 4), s.inputFrequency, s.fullScale) : null,
     kickback_v: plan.budget.kick_share * lsb,
     memory_v: plan.budget.memory_share * lsb,
-    input_cap_f: Math.min(caps.sampler, caps.ladder) / (codes - 1),
+    input_cap_f: inputCapLimit(s, kind),
   }
   const taps = Array.from({ length: codes - 1 }, (_, i) => i + 1).map((k) => {
+    const threshold = -s.fullScale / 2 + k * lsb
     const variance = Math.min(spread, yields.inl ** 2 - tapVariance(lsb, ladder, codes, k), yields.dnl ** 2 - (lsb * ladder) ** 2 / 2)
-    return { threshold: -s.fullScale / 2 + k * lsb, limits: { ...common, offset_v: Math.sqrt(Math.max(0, variance)) } }
+    return { threshold, limits: { ...common, offset_v: Math.sqrt(Math.max(0, variance)), skew_s: skewLimit(s, kind, budget, threshold) } }
   })
   return Array.from({ length: s.lanes }, (_, lane) => lane)
     .flatMap((lane) => taps.map((tap) => ({ lane, cycle: null, commonMode: plan.converter.common_mode_v, ...tap })))

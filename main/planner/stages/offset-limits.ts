@@ -1,4 +1,5 @@
 import { sigmasHoldingAll } from '../models/yield/absolute-inl'
+import { comparatorPerBitSigmaLimit } from '../models/yield/successive'
 import { dnlSigmaLimit, inlSigmaLimit, type InlLine } from '../models/yield/sigma-limits'
 import { trimStepLimit } from '../models/yield/trim-step'
 import type { Situation } from './situation'
@@ -28,6 +29,16 @@ export function trimLimit(s: Situation, spread: number): number {
   const sigma = s.kind.architecture === 'flash' ? s.kind.flash.ladder_sigma : 0
   return Math.min(yieldStep(s, sigma), Math.sqrt(12 * spread))
 }
+
+/** Largest spread of the comparators of a SAR with one per bit for which INL and DNL meet their yields [V]. */
+export function perBitSigma(s: Situation): number {
+  const { inl_lsb, dnl_lsb } = s.plan.converter
+  return comparatorPerBitSigmaLimit(s.bits, s.laneYield) * Math.min(inl_lsb, dnl_lsb) * s.lsb
+}
+
+/** The part of the spread share that offsets may use: all of it, ¾ where skew has a quarter (lanes, or no front sampler). */
+export const offsetPart = ({ lanes, kind }: Situation): number =>
+  (lanes > 1 || (kind.architecture === 'flash' && !kind.flash.front_sampler) ? 0.75 : 1)
 
 /** ± so many σ_os hold the raw offset of every comparator of the chip. */
 export const trimSigmas = (s: Situation): number => sigmasHoldingAll(s.comparatorCount, s.yieldEach)

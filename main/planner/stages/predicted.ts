@@ -4,6 +4,7 @@ import { effectiveBits, sndr } from '../models/budget/error-power'
 import { schreierFigure, waldenFigure } from '../models/merit/figures'
 import type { Bank } from './bank'
 import { attainedAt } from './reached'
+import { offsetOnlyShifts } from './situation'
 
 /** Mean over the positions of a squared reached quantity at one condition [V²]; null where there is no latch. */
 function meanSquare(bank: Bank, condition: Condition, read: 'noise' | 'residual'): number | null {
@@ -13,7 +14,7 @@ function meanSquare(bank: Bank, condition: Condition, read: 'noise' | 'residual'
     const name = `${commonMode}/${limits.overdrive_v}`
     if (!known.has(name)) {
       const point = bank.evaluated.find((e) => e.condition === condition && e.commonMode === commonMode)!
-      known.set(name, attainedAt(bank.s, bank.design, point, limits.overdrive_v!)?.[read] ?? null)
+      known.set(name, attainedAt(bank.s, bank.design, point, limits.overdrive_v)?.[read] ?? null)
     }
     const value = known.get(name)!
     if (value === null) return null
@@ -25,7 +26,7 @@ function meanSquare(bank: Bank, condition: Condition, read: 'noise' | 'residual'
 /** The budget with what is used of it at one condition; fixed items use what they are allowed. */
 export function budgetLines(bank: Bank, condition: Condition): BudgetLine[] {
   const { budget, s } = bank
-  const spreadCosts = s.kind.architecture === 'flash'
+  const spreadCosts = !offsetOnlyShifts(s)
   return [
     { item: 'quantisation', allowed_v2: budget.quantisation, used_v2: budget.quantisation },
     { item: 'jitter', allowed_v2: budget.jitter, used_v2: budget.jitter },

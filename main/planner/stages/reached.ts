@@ -4,11 +4,13 @@ import type { LatchFailure } from '../latch/balanced'
 import type { Condition } from '../latch/condition'
 import { cycleEnergy, evaluateFully } from '../latch/cycle'
 import { circuitOf, latchFigures, patienceOf, type LatchFigures } from './latch-figures'
-import type { LatchDesign } from './design'
+import { conversionDelayByCycle, type CycleLatch } from '../models/timing/self-timed'
+import { designInputCap, type LatchDesign } from './design'
+import { cycleCommonMode, searchShape } from './limits-sar'
 import type { Demand, Position } from './positions'
 import type { Situation } from './situation'
 import { comparatorArea } from './sizing/cost'
-import { attained, limitKeys, pairsOf, useOf, type Attained } from './uses'
+import { attained, attenuationOf, limitKeys, pairsOf, useOf, type Attained } from './uses'
 
 /** The finished design at one condition and common mode: figures, energy, supply charge; or why there are none. */
 export interface Evaluated {
@@ -18,6 +20,8 @@ export interface Evaluated {
   readonly failure: LatchFailure | null
   readonly energy: number | null
   readonly charge: number | null
+  /** Delay of all decisions of a self-timed search whose common mode falls from cycle to cycle [s]. */
+  readonly conversion?: number
 }
 
 const longestWindow = (demand: Demand): number => Math.max(demand.limits.window_s, 0)
@@ -36,18 +40,33 @@ function evaluateAt(s: Situation, design: LatchDesign, condition: Condition, dem
 
 /** Every condition at every common mode of the bank. */
 export const evaluateDesign = (s: Situation, design: LatchDesign, demands: readonly Demand[]): Evaluated[] =>
-  s.conditions.flatMap((condition) => demands.map((demand) => evaluateAt(s, design, condition, demand)))
+  s.conditions.flatMap((condition) => {
+    const points = demands.map((demand) => evaluateAt(s, design, condition, demand))
+    const conversion = fallingConversion(s, design, points)
+    return conversion === undefined ? points : points.map((point) => ({ ...point, conversion }))
+  })
+
+/** All decisions of a self-timed search with the latch as it is in each cycle; undefined where one figure serves all cycles. */
+function fallingConversion(s: Situation, design: LatchDesign, points: readonly Evaluated[]): number | undefined {
+  const { kind } = s
+  if (kind.architecture !== 'sar' || kind.sar.timing !== 'self_timed' || points.length < 2) return undefined
+  const latches = kind.cycles.map(({ cycle }) => points.find((p) => p.commonMode === cycleCommonMode(s, kind, cycle))?.figures?.analysis ?? null)
+  if (latches.some((latch) => latch === null)) return undefined
+  const swing = points[0].condition.supply / attenuationOf(s, designInputCap(s, design))
+  return conversionDelayByCycle(searchShape(s, kind), latches as CycleLatch[], swing, s.plan.converter.error_rate)
+}
 
 /** What is reached for an overdrive at one evaluated point; null where there is no latch. */
-export const attainedAt = (s: Situation, design: LatchDesign, { condition, figures }: Evaluated, overdrive: number): Attained | null =>
-  figures === null ? null : attained(s, design, condition, figures, overdrive)
+export const attainedAt = (
+  s: Situation, design: LatchDesign, { condition, figures, conversion }: Evaluated, overdrive: number | null,
+): Attained | null => (figures === null ? null : attained(s, design, condition, figures, overdrive, conversion))
 
 const worst = (values: readonly (number | null)[]): number | null =>
   values.some((value) => value === null) ? null : Math.max(...(values as number[]))
 
 /** Worst over the conditions, quantity by quantity. */
 function reachedOf(s: Situation, design: LatchDesign, points: readonly Evaluated[], limits: Limits): Reached {
-  const all = points.map((point) => attainedAt(s, design, point, limits.overdrive_v!))
+  const all = points.map((point) => attainedAt(s, design, point, limits.overdrive_v))
   const pick = (read: (a: Attained) => number | null): number | null => worst(all.map((a) => (a === null ? null : read(a))))
   const engine = (read: (f: LatchFigures) => number): number | null => worst(points.map((p) => (p.figures === null ? null : read(p.figures))))
   return {

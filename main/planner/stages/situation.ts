@@ -2,7 +2,7 @@ import type { Card } from '../../contract/cards'
 import type { FlashBrief, Plan, SarBrief } from '../../contract/plan'
 import { conditionsOf, type Condition } from '../latch/condition'
 import { arrayUnits } from '../models/dac/scheme'
-import { binaryWeights, searchCycles, type SearchCycle } from '../models/timing/search'
+import { searchCycles, searchWeights, type SearchCycle } from '../models/timing/search'
 
 /** What follows from the brief by definition alone; every later stage reads it. SI units. */
 export interface Situation {
@@ -47,6 +47,10 @@ export interface SarSituation {
   readonly sar: SarBrief
   readonly cycles: readonly SearchCycle[]
   readonly cycleTime: number
+  /** B: what is left of the lane period for all decisions of a self-timed search [s]. */
+  readonly decisionTime: number
+  /** Physical comparators of one lane. */
+  readonly perLane: number
   /** Array capacitance of one side [F]. */
   readonly arrayCap: number
   readonly resetTime: number
@@ -60,10 +64,12 @@ function flashSituation(plan: Plan, laneTime: number): FlashSituation {
 function sarSituation(plan: Plan, lsb: number, laneTime: number): SarSituation {
   const sar = plan.converter.sar!
   const bits = plan.converter.resolution_bits
-  const cycles = searchCycles(binaryWeights(bits), plan.converter.full_scale_v, lsb, sar.dac_tau_s, sar.settle_lsb * lsb)
+  const cycles = searchCycles(searchWeights(bits, sar.redundant_cycles), plan.converter.full_scale_v, lsb, sar.dac_tau_s, sar.settle_lsb * lsb)
   return {
     architecture: 'sar', sar, cycles,
     cycleTime: (laneTime * (1 - sar.sample_fraction)) / cycles.length,
+    decisionTime: laneTime * (1 - sar.sample_fraction) - cycles.reduce((sum, c) => sum + sar.logic_delay_s + c.settle, 0),
+    perLane: sar.comparators === 'one' ? 1 : cycles.length,
     arrayCap: arrayUnits(sar.dac_scheme, bits) * sar.unit_cap_f,
     resetTime: Math.min(...cycles.slice(1).map((c) => sar.logic_delay_s + c.settle)),
   }
@@ -88,8 +94,15 @@ export function situationOf(plan: Plan, card: Card): Situation {
     hottest: Math.max(...conditions.map((c) => c.temperature)),
     captureSetup: budget.capture_setup_s ?? card.logic.fo4_s,
     clockUncertainty: budget.clock_uncertainty_s ?? card.logic.fo4_s / 2,
-    comparatorCount: converter.lanes * (kind.architecture === 'flash' ? codes - 1 : 1),
+    comparatorCount: converter.lanes * (kind.architecture === 'flash' ? codes - 1 : kind.perLane),
     decisionRate: perSample * converter.sample_rate_hz,
     laneYield: yieldEach ** (1 / converter.lanes),
   }
 }
+
+/** Whether one comparator's offset only shifts the transfer: a SAR of one lane with one comparator. */
+export const offsetOnlyShifts = ({ kind, lanes }: Situation): boolean => kind.architecture === 'sar' && kind.perLane === 1 && lanes === 1
+
+/** Capacitance per side that a sample is held on [F]; null in a flash without front sampler. */
+export const heldCapacitance = ({ kind }: Situation): number | null =>
+  (kind.architecture === 'sar' ? kind.arrayCap : kind.flash.front_sampler ? kind.flash.sampling_cap_f : null)

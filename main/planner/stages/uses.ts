@@ -1,12 +1,16 @@
 import type { LimitName } from '../../contract/choices'
 import type { Limits } from '../../contract/result'
 import type { Condition } from '../latch/condition'
+import { samplingPower } from '../models/budget/error-power'
 import { capacitorKick, ladderKick, ladderTime } from '../models/interference/kickback'
 import { arrayAttenuation } from '../models/input/load'
 import { overlapPerWidth } from '../models/mos/capacitance'
 import { trimStep, uniformSpread } from '../models/offset/trim'
 import { decisionDelay } from '../models/timing/metastability'
+import { conversionDelay } from '../models/timing/self-timed'
 import { designInputCap, type LatchDesign } from './design'
+import { bankCount } from './limits-flash'
+import { searchShape } from './limits-sar'
 import type { LatchFigures } from './latch-figures'
 import type { Situation } from './situation'
 
@@ -34,10 +38,9 @@ export function kickbackOf(s: Situation, design: LatchDesign, condition: Conditi
   const { kick_imbalance } = s.plan.budget
   if (s.kind.architecture === 'sar') return capacitorKick(kick_imbalance, condition.supply, 1, edge, s.kind.arrayCap)
   const { flash, resetTime } = s.kind
-  const count = s.codes - 1
-  const bank = count * inputCap
-  return ladderKick(condition.supply, edge, inputCap, resetTime, ladderTime(flash.ladder_ohm, bank))
-    + capacitorKick(kick_imbalance, condition.supply, count, edge, flash.sampling_cap_f + bank)
+  const bank = bankCount(s, s.kind) * inputCap
+  const onLadder = ladderKick(condition.supply, edge, inputCap, resetTime, ladderTime(flash.ladder_ohm, bank))
+  return flash.front_sampler ? onLadder + capacitorKick(kick_imbalance, condition.supply, s.codes - 1, edge, flash.sampling_cap_f + bank) : onLadder
 }
 
 /** Step of the trim at the latch's input [V]; null without trim. */
@@ -46,17 +49,42 @@ export function trimStepOf(design: LatchDesign, { circuit, analysis }: LatchFigu
   return trimStep(design.trim.unit, analysis.capacitanceWeight[circuit.inner], circuit.sideCapacitance[circuit.inner])
 }
 
-/** Everything reached at a condition for an overdrive [V] that must be resolved at the converter's input. */
-export function attained(s: Situation, design: LatchDesign, condition: Condition, figures: LatchFigures, overdrive: number): Attained {
+/** Noise with what an autozero stores on its capacitors: √(σ² + 2kT/C_az) [V]. */
+function noiseOf({ plan }: Situation, { noise }: LatchFigures['analysis'], temperature: number): number {
+  const { offset_method, autozero_cap_f } = plan.comparator
+  return offset_method === 'autozero' ? Math.sqrt(noise ** 2 + samplingPower(temperature, autozero_cap_f)) : noise
+}
+
+/** What the offset plan leaves of a raw spread [V]. */
+function residualOf({ plan }: Situation, raw: number, step: number | null): number {
+  if (step !== null) return uniformSpread(step)
+  return plan.comparator.offset_method === 'autozero' ? raw / plan.comparator.autozero_gain : raw
+}
+
+/** Time of one decision, or of all decisions of a self-timed conversion with this latch in every cycle [s]. */
+function delayOf(s: Situation, { analysis }: LatchFigures, swing: number, overdrive: number | null): number {
+  if (overdrive !== null) return decisionDelay(analysis.integration, analysis.tau, swing, overdrive)
+  if (s.kind.architecture !== 'sar') throw new RangeError('only a self-timed search has no overdrive of its own')
+  return conversionDelay(searchShape(s, s.kind), analysis, swing, s.plan.converter.error_rate)
+}
+
+/**
+ * Everything reached at a condition, referred to the converter's input.
+ * @param overdrive what must be resolved there [V]; null in a self-timed search, whose delay is that of all decisions
+ * @param conversion that delay where it is known for latches that differ from cycle to cycle [s]
+ */
+export function attained(
+  s: Situation, design: LatchDesign, condition: Condition, figures: LatchFigures, overdrive: number | null, conversion?: number,
+): Attained {
   const inputCap = designInputCap(s, design)
   const a = attenuationOf(s, inputCap)
   const raw = trimStepOf(design, figures)
   const step = raw === null ? null : raw / a
   return {
-    delay: decisionDelay(figures.analysis.integration, figures.analysis.tau, condition.supply, a * overdrive),
-    noise: figures.analysis.noise / a,
+    delay: conversion ?? delayOf(s, figures, condition.supply / a, overdrive),
+    noise: noiseOf(s, figures.analysis, condition.temperature) / a,
     offset: figures.offset / a,
-    residual: step === null ? figures.offset / a : uniformSpread(step),
+    residual: residualOf(s, figures.offset / a, step),
     trimStep: step,
     kickback: kickbackOf(s, design, condition) / a,
     memory: figures.leftover.atInput / a,

@@ -18,8 +18,12 @@ describe('figures in words', () => {
     expect(reachedOfLimit(8.6e-4, 8.2e-4, 'V')).toBe('860 of 820 µV')
     expect(reachedOfLimit(2e-4, 9e-4, 'V')).toBe('200 of 900 µV')
     expect(reachedOfLimit(2e-10, 2.3e-9, 's')).toBe('0.20 of 2.30 ns')
+    expect(reachedOfLimit(2.01e-11, 7.5e-3, 'V')).toBe('20.1 pV of 7.50 mV')
+    expect(reachedOfLimit(1.16e-10, 1.67e-13, 's')).toBe('116 ps of 167 fs')
+    expect(reachedOfLimit(0, 0.005, 'V')).toBe('0 V of 5.00 mV')
+    expect(reachedOfLimit(9.999e-11, 1e-10, 's')).toBe('100 of 100 ps')
     expect(reachedOfLimit(null, 1e-3, 'V')).toBe('— of 1.00 mV')
-    expect(reachedOfLimit(1e-12, -4e-11, 's')).toBe('1.00 of −40.0 ps')
+    expect(reachedOfLimit(1e-12, -4e-11, 's')).toBe('1.00 ps of −40.0 ps')
   })
 
   it('leaves out zeros that only fill up', () => {

@@ -1,11 +1,11 @@
 import type { Condition } from '../../latch/condition'
 import { trimCapacitanceChange } from '../../models/offset/trim'
 import { trimSigmas } from '../offset-limits'
-import type { LatchDesign } from '../design'
+import { designInputCap, type LatchDesign } from '../design'
 import { latchFigures, patienceOf, type LatchFigures } from '../latch-figures'
 import type { Demand } from '../positions'
 import type { Situation } from '../situation'
-import { attained, limitKeys, pairsOf } from '../uses'
+import { attained, attenuationOf, limitKeys, pairsOf } from '../uses'
 
 /** How a design stands at one condition and common mode. */
 export interface Appraisal {
@@ -28,9 +28,13 @@ export function rangeUse(s: Situation, design: LatchDesign, figures: LatchFigure
   return change / (2 ** design.trim.bits * design.trim.unit)
 }
 
-/** Uses against limits that can be met at all; a limit of 0 or less cannot steer the sizing. */
+/**
+ * Uses against limits that can be met at all; a limit of 0 or less cannot steer the sizing. Memory counts with the
+ * magnitudes of its parts: a design whose leftovers happen to cancel would not survive its own spread.
+ */
 function usesOf(s: Situation, design: LatchDesign, condition: Condition, demand: Demand, figures: LatchFigures): number[] {
-  const reached = attained(s, design, condition, figures, demand.limits.overdrive_v!)
+  const memory = figures.leftover.atMost / attenuationOf(s, designInputCap(s, design))
+  const reached = { ...attained(s, design, condition, figures, demand.limits.overdrive_v), memory }
   return [...pairsOf(demand.limits, reached).map(([value, limit]) => (limit > 0 ? value / limit : 0)), rangeUse(s, design, figures)]
 }
 

@@ -57,6 +57,8 @@ export interface SearchOptions {
   readonly margin: number
   readonly iterations: number
   readonly radius: number
+  /** Logarithm of the cost that a step must promise to go on. */
+  readonly gain: number
 }
 
 /** One local search over the unknowns with the engine at every step; the spots are the conditions that may bind. */
@@ -75,7 +77,7 @@ export function searchDesign(
   }
   const found = minimiseConstrained({
     evaluate, lower: space.lower, upper: space.upper, difference: 0.02, price: 12,
-    firstRadius: options.radius, smallestRadius: 1e-3, smallestGain: 2e-4, iterations: options.iterations,
+    firstRadius: options.radius, smallestRadius: 1e-3, smallestGain: options.gain, iterations: options.iterations,
   }, space.fromDesign(from))
   return { design: space.toDesign(found.x), settled: found.settled }
 }
@@ -101,7 +103,7 @@ export function nearestDesign(
   const worst = Math.max(...valuesAt(start))
   const found = minimiseConstrained({
     evaluate, lower: Float64Array.from([...space.lower, -2]), upper: Float64Array.from([...space.upper, 20]), difference: 0.02, price: 12,
-    firstRadius: 1, smallestRadius: 1e-3, smallestGain: 1e-3, iterations: 60,
+    firstRadius: options.radius, smallestRadius: 1e-3, smallestGain: options.gain, iterations: options.iterations,
   }, Float64Array.from([...start, worst]))
   return space.toDesign(found.x.subarray(0, n))
 }

@@ -7,11 +7,19 @@ import { appraise, type Appraisal } from './appraise'
 import { calibrate, costOf, nearestDesign, searchDesign, spotName, type Calibration, type Spot } from './search'
 import { settleTrim, smallestTrim } from './settle-trim'
 import { startDesign } from './start'
-import { widthUnknowns } from './unknowns'
+import { unknownSpace, widthUnknowns } from './unknowns'
 
 /** Safety below every limit while searching: covers what the search takes from a neighbour. */
 const margin = 0.003
-const passes = 4
+const passes = 6
+const roughPasses = 3
+/** Gain that a step of the search must promise, while the number of bits is open and after. */
+const roughGain = 1e-3
+const fineGain = 2e-4
+/** Cost after a pass over that before it, above which another pass is not worth its time. */
+const worthwhile = 0.995
+const neighbour = 0.1
+const repeats = 3
 /** Sizes of the first designs tried, in units of the usual one. */
 const startSizes = [1, 6]
 const usualBits = 5
@@ -51,15 +59,22 @@ function bindingSpots(appraisals: readonly Appraisal[], energySpot: Spot): Spot[
 }
 
 interface Candidate { design: LatchDesign; appraisals: Appraisal[]; calibration: Calibration }
+type Built = Candidate & { trimConverged: boolean }
+
+const costOfCandidate = (s: Situation, c: Candidate): number => costOf(s, c.design, c.appraisals, c.calibration)
 
 const missed = (candidate: Candidate): boolean => worstUse(candidate.appraisals) > 1
 
-/** Searches on the spots that can bind, looks at all, adds what was missed, until nothing is. */
-function refine(s: Situation, spots: readonly Spot[], from: Candidate, trim: false | number | 'free', firstRadius: number): Candidate {
+/**
+ * Searches on the spots that can bind, looks at all, adds what was missed, until nothing is and another pass gains nothing.
+ * @param longest how many passes at most
+ */
+function refine(s: Situation, spots: readonly Spot[], from: Candidate, trim: false | number | 'free', radius: number, longest: number): Candidate {
   let candidate = from
   let working = bindingSpots(candidate.appraisals, candidate.calibration.energySpot)
-  for (let pass = 0; pass < passes; pass++) {
-    const options = { trim, margin, iterations: 40, radius: pass === 0 ? firstRadius : 0.3 }
+  for (let pass = 0; pass < longest; pass++) {
+    const before = missed(candidate) ? Infinity : costOfCandidate(s, candidate)
+    const options = { trim, margin, iterations: 40, radius: pass === 0 ? radius : 0.3, gain: trim === 'free' ? roughGain : fineGain }
     const { design, settled } = searchDesign(s, working, candidate.calibration, candidate.design, options)
     const { appraisals, calibration } = calibrate(s, design, spots)
     if (calibration === null) return candidate
@@ -67,22 +82,55 @@ function refine(s: Situation, spots: readonly Spot[], from: Candidate, trim: fal
     if (worstUse(appraisals) > hopeless) break
     const known = new Set(working.map(spotName))
     const added = appraisals.filter((a) => a.uses.some((use) => use > 1) && !known.has(spotName(a)))
-    if (added.length === 0 && (settled || pass > 0)) break
     working = [...working, ...added]
+    if (added.length === 0 && !missed(candidate) && (settled || costOfCandidate(s, candidate) > worthwhile * before)) break
+  }
+  return candidate
+}
+
+/**
+ * A neighbour a tenth away in one unknown that is feasible and cheaper by more than the search may leave: a loose end.
+ * Null where there is none.
+ */
+function looseEnd(s: Situation, { design, calibration, appraisals }: Candidate): LatchDesign | null {
+  const space = unknownSpace(s.card, design.trim === null ? false : design.trim.bits)
+  const at = space.fromDesign(design)
+  const working = bindingSpots(appraisals, calibration.energySpot)
+  const limit = worthwhile ** 3 * costOf(s, design, appraisals, calibration)
+  for (let i = 0; i < at.length; i++) {
+    for (const step of [-neighbour, neighbour]) {
+      if (at[i] + step < space.lower[i] || at[i] + step > space.upper[i]) continue
+      const moved = space.toDesign(at.map((value, j) => (j === i ? value + step : value)))
+      const there = working.map((spot) => appraise(s, moved, spot.condition, spot.demand, calibration.departure.get(spotName(spot))))
+      if (worstUse(there) <= 1 && costOf(s, moved, there, calibration) < limit) return moved
+    }
+  }
+  return null
+}
+
+/** Refines until no loose end is left. */
+function finish(s: Situation, spots: readonly Spot[], start: Candidate, bits: number | false): Built {
+  let candidate = built(s, spots, refine(s, spots, start, bits, 0.3, passes))
+  for (let again = 0; again < repeats && !missed(candidate); again++) {
+    const better = looseEnd(s, candidate)
+    if (better === null) break
+    const { appraisals, calibration } = calibrate(s, better, spots)
+    const from = { design: better, appraisals, calibration: calibration ?? candidate.calibration }
+    const next = built(s, spots, refine(s, spots, from, bits, 0.3, passes))
+    if (missed(next) || costOfCandidate(s, next) >= costOfCandidate(s, candidate)) break
+    candidate = next
   }
   return candidate
 }
 
 /** Rounds to drawn dimensions and settles the trim; the candidate as it would be built. */
-function built(s: Situation, spots: readonly Spot[], candidate: Candidate): Candidate & { trimConverged: boolean } {
+function built(s: Situation, spots: readonly Spot[], candidate: Candidate): Built {
   const widths = drawn(candidate.design.widths, { w: s.card.w_min_m, l: s.card.l_min_m })
   const { trim } = candidate.design
   const settled = trim === null ? { design: { widths, trim }, converged: true } : settleTrim(s, widths, trim.bits, spots, trim.unit)
   const { appraisals, calibration } = calibrate(s, settled.design, spots)
   return { design: settled.design, appraisals, calibration: calibration ?? candidate.calibration, trimConverged: settled.converged }
 }
-
-const costOfCandidate = (s: Situation, c: Candidate): number => costOf(s, c.design, c.appraisals, c.calibration)
 
 /** Whole numbers of bits worth trying around a relaxed one. */
 function bitChoices(s: Situation, relaxed: LatchDesign): (number | false)[] {
@@ -92,18 +140,16 @@ function bitChoices(s: Situation, relaxed: LatchDesign): (number | false)[] {
   return [below, Math.min(16, below + 1)]
 }
 
-type Built = Candidate & { trimConverged: boolean }
-
 /** Cheapest design that meets everything from one start; where none is found, how far the search stayed from one. */
 function sizeFrom(s: Situation, spots: readonly Spot[], start: Candidate): { found: Built | null; miss: number } {
   const fixed = s.plan.comparator.trim_bits
-  const relaxed = refine(s, spots, start, start.design.trim === null ? false : fixed ?? 'free', 1)
+  const relaxed = refine(s, spots, start, start.design.trim === null ? false : fixed ?? 'free', 1, roughPasses)
   const miss = worstUse(relaxed.appraisals)
   if (miss > outOfReach) return { found: null, miss }
   const finished = bitChoices(s, relaxed.design).map((bits) => {
-    if (bits === false || fixed !== null) return built(s, spots, relaxed)
+    if (bits === false || fixed !== null) return finish(s, spots, relaxed, bits)
     const whole: LatchDesign = { widths: relaxed.design.widths, trim: { bits, unit: relaxed.design.trim!.unit } }
-    return built(s, spots, refine(s, spots, { ...relaxed, design: whole }, bits, 0.3))
+    return finish(s, spots, { ...relaxed, design: whole }, bits)
   }).filter((c) => c.trimConverged && !missed(c))
   const cheaper = (best: Built | null, c: Built) => (best === null || costOfCandidate(s, c) < costOfCandidate(s, best) ? c : best)
   return { found: finished.reduce<Built | null>(cheaper, null), miss }
@@ -120,7 +166,7 @@ function startCandidate(s: Situation, spots: readonly Spot[], demands: readonly 
 function nearest(s: Situation, spots: readonly Spot[], start: Candidate): Sized {
   const fixed = s.plan.comparator.trim_bits
   const trim = start.design.trim === null ? false : fixed ?? 'free'
-  const found = nearestDesign(s, spots, start.calibration, start.design, { trim, margin: 0, iterations: 60, radius: 1 })
+  const found = nearestDesign(s, spots, start.calibration, start.design, { trim, margin: 0, iterations: 60, radius: 1, gain: 1e-3 })
   const whole = found.trim === null ? found : { ...found, trim: { ...found.trim, bits: Math.max(1, Math.round(found.trim.bits)) } }
   const finished = built(s, spots, { ...start, design: whole })
   return { design: finished.design, feasible: false, trimConverged: finished.trimConverged }

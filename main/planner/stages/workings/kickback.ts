@@ -4,6 +4,7 @@ import { overlapPerWidth } from '../../models/mos/capacitance'
 import { references } from '../../references'
 import type { Bank } from '../bank'
 import { designInputCap } from '../design'
+import { bankCount } from '../limits-flash'
 import { numbers, working } from './working'
 
 /** Working of the kickback at the condition where it is largest. */
@@ -14,10 +15,12 @@ export function kickbackWorking({ s, design }: Bank, { supply, name }: Condition
     return working('reached.kickback_v', `Kickback, ${name}`, 'κ_i · V_DD · W_in c_f / C_DAC', numbers`${imbalance} * ${supply} * ${edge} / ${s.kind.arrayCap} / ${a}`, entry.reached.kickback_v, 'V', references.practice)
   }
   const { flash, resetTime } = s.kind
-  const count = s.codes - 1
   const inputCap = designInputCap(s, design)
-  const bank = count * inputCap
-  return working('reached.kickback_v', `Kickback, ${name}`, 'V_DD·W_in c_f/C_in · exp(−t_reset π²/(R_L C_bank)) + κ_i·V_DD·(M−1) W_in c_f/(C_s + C_bank)',
-    numbers`${supply} * ${edge} / ${inputCap} * exp(-${resetTime} * pi^2 / (${flash.ladder_ohm} * ${bank})) + ${imbalance} * ${supply} * ${count} * ${edge} / (${flash.sampling_cap_f} + ${bank})`,
-    entry.reached.kickback_v, 'V', `${references.practice}; slowest mode of a uniformly loaded ladder`)
+  const bank = bankCount(s, s.kind) * inputCap
+  const onLadder = numbers`${supply} * ${edge} / ${inputCap} * exp(-${resetTime} * pi^2 / (${flash.ladder_ohm} * ${bank}))`
+  const held = numbers`${imbalance} * ${supply} * ${s.codes - 1} * ${edge} / (${flash.sampling_cap_f} + ${bank})`
+  const formula = 'V_DD·W_in c_f/C_in · exp(−t_reset π²/(R_L C_bank))'
+  return working('reached.kickback_v', `Kickback, ${name}`, flash.front_sampler ? `${formula} + κ_i·V_DD·(M−1) W_in c_f/(C_s + C_bank)` : formula,
+    flash.front_sampler ? `${onLadder} + ${held}` : onLadder, entry.reached.kickback_v, 'V',
+    `${references.practice}; slowest mode of a uniformly loaded ladder`)
 }

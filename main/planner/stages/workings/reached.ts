@@ -1,5 +1,6 @@
 import type { ComparatorEntry, Working } from '../../../contract/result'
 import { references } from '../../references'
+import { boltzmann } from '../../constants'
 import type { Bank } from '../bank'
 import { drawnDevices, designInputCap } from '../design'
 import type { LatchFigures } from '../latch-figures'
@@ -32,11 +33,20 @@ function latchWorkings(at: (read: (f: LatchFigures) => number) => Evaluated): Wo
 
 function delayWorking(bank: Bank, point: Evaluated, entry: ComparatorEntry, a: number): Working {
   const { analysis } = point.figures!
-  const { supply } = point.condition
-  const sar = bank.s.kind.architecture === 'sar'
-  return working('reached.delay_s', `Decision, ${point.condition.name}`, sar ? 't_0 + τ·ln(V_DD / 2av)' : 't_0 + τ·ln(V_DD / 2v)',
-    numbers`${analysis.integration} + ${analysis.tau} * ln(${supply} / (2 * ${a * entry.limits.overdrive_v!}))`,
-    analysis.integration + analysis.tau * Math.log(supply / (2 * a * entry.limits.overdrive_v!)), 's', references.veendrick)
+  const { supply, name } = point.condition
+  const { kind } = bank.s
+  const { overdrive_v } = entry.limits
+  const delay = attainedAt(bank.s, bank.design, point, overdrive_v)!.delay
+  if (overdrive_v === null && kind.architecture === 'sar') {
+    const count = kind.cycles.length
+    const title = `All decisions of a conversion, ${name}`
+    return point.conversion !== undefined
+      ? working('reached.delay_s', title, 'B at which P(B) = P_e, the latch as it is in each cycle', numbers`${delay}`, delay, 's', references.tail)
+      : working('reached.delay_s', title, 'K·t_0 + τ·β with P(β) = P_e in units of τ',
+        numbers`${count} * ${analysis.integration} + ${analysis.tau} * ${(delay - count * analysis.integration) / analysis.tau}`, delay, 's', references.tail)
+  }
+  return working('reached.delay_s', `Decision, ${name}`, kind.architecture === 'sar' ? 't_0 + τ·ln(V_DD / 2av)' : 't_0 + τ·ln(V_DD / 2v)',
+    numbers`${analysis.integration} + ${analysis.tau} * ln(${supply} / (2 * ${a * overdrive_v!}))`, delay, 's', references.veendrick)
 }
 
 function offsetWorkings({ s, design }: Bank, point: Evaluated, a: number): Working[] {
@@ -51,9 +61,13 @@ function offsetWorkings({ s, design }: Bank, point: Evaluated, a: number): Worki
   ]
 }
 
-function trimWorkings({ design }: Bank, point: Evaluated, entry: ComparatorEntry, a: number): Working[] {
+function trimWorkings({ s, design }: Bank, point: Evaluated, entry: ComparatorEntry, a: number): Working[] {
   if (design.trim === null) {
-    return [working('reached.residual_v', 'Residual offset', 'the raw one: nothing is trimmed', numbers`${entry.reached.offset_v!}`, entry.reached.residual_v, 'V', references.definition)]
+    const { offset_method, autozero_gain } = s.plan.comparator
+    const [raw, left] = [entry.reached.offset_v!, entry.reached.residual_v]
+    return [offset_method === 'autozero'
+      ? working('reached.residual_v', 'Residual offset', 'raw / autozero gain', numbers`${raw} / ${autozero_gain}`, left, 'V', references.practice)
+      : working('reached.residual_v', 'Residual offset', 'the raw one: nothing is trimmed', numbers`${raw}`, left, 'V', references.definition)]
   }
   const { circuit, analysis } = point.figures!
   const step = entry.reached.trim_step_v!
@@ -84,6 +98,17 @@ function areaWorking({ s, design }: Bank, entry: ComparatorEntry): Working {
     `${numbers`${s.card.layout.factor}`} * (${terms.join(' + ')})`, entry.reached.area_m2, 'm²', references.practice)
 }
 
+function noiseWorking({ s }: Bank, { figures, condition }: Evaluated, entry: ComparatorEntry, a: number): Working {
+  const { variance, gain } = figures!.analysis
+  const title = `Noise of one decision, ${condition.name}`
+  const { offset_method, autozero_cap_f } = s.plan.comparator
+  const noise = entry.reached.noise_v
+  return offset_method === 'autozero'
+    ? working('reached.noise_v', title, '√(P/g² + 2kT/C_az), at the converter’s input',
+        numbers`sqrt(${variance} / ${gain}^2 + 2 * ${boltzmann} * ${condition.temperature} / ${autozero_cap_f}) / ${a}`, noise, 'V', references.engine)
+    : working('reached.noise_v', title, '√P / g, at the converter’s input', numbers`sqrt(${variance}) / ${gain} / ${a}`, noise, 'V', references.engine)
+}
+
 /** Workings of what one comparator reaches, each at the condition where it is worst. */
 export function reachedWorkings(bank: Bank, entry: ComparatorEntry): Working[] {
   const { s, design } = bank
@@ -92,13 +117,12 @@ export function reachedWorkings(bank: Bank, entry: ComparatorEntry): Working[] {
   const inputCap = designInputCap(s, design)
   const a = attenuationOf(s, inputCap)
   const engine = (read: (f: LatchFigures) => number) => worstBy(points, (p) => read(p.figures!))
-  const held = (read: (r: Attained) => number) => worstBy(points, (p) => read(attainedAt(s, design, p, entry.limits.overdrive_v!)!))
+  const held = (read: (r: Attained) => number) => worstBy(points, (p) => read(attainedAt(s, design, p, entry.limits.overdrive_v)!))
   const noisy = held((r) => r.noise)
-  const { analysis } = noisy.figures!
   return [
     ...latchWorkings(engine),
     delayWorking(bank, held((r) => r.delay), entry, a),
-    working('reached.noise_v', `Noise of one decision, ${noisy.condition.name}`, '√P / g, at the converter’s input', numbers`sqrt(${analysis.variance}) / ${analysis.gain} / ${a}`, analysis.noise / a, 'V', references.engine),
+    noiseWorking(bank, noisy, entry, a),
     ...offsetWorkings(bank, held((r) => r.offset), a),
     ...trimWorkings(bank, held((r) => r.trimStep ?? 0), entry, a),
     kickbackWorking(bank, held((r) => r.kickback).condition, entry, a),
