@@ -20,7 +20,7 @@ export const cardSchema = z.strictObject({
   title: z.string().max(200),
   l_min_m: positive(1e-4),
   w_min_m: positive(1e-3),
-  vdd_v: positive(50),
+  vdd_v: z.number().min(0.05).max(15),
   n: deviceSchema,
   p: deviceSchema,
   cap: z.strictObject({

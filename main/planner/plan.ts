@@ -55,5 +55,7 @@ export function plan(document: Plan, card: Card, options: PlanOptions = {}): Res
   return withRemedies(result, {
     shortfall: (changed) => shortfallOf(changed, card),
     replan: (changed) => planOnce(changed, card, {}),
+    supply: card.vdd_v,
+    effort: bankOf(document, card).evaluated.length,
   })
 }

@@ -84,14 +84,14 @@ describe('what is refused, all of it at once', () => {
       schema: 'latchwright.plan/1', tittle: 'x',
       converter: {
         architecture: 'flash', resolution_bits: 12, sample_rate_hz: '2G', yield: 2, inl_method: 'best-fit', sample_rate: 1,
-        flash: { input_style: 'single_ended', front_sampler: false },
+        flash: { input_style: 'single_ended' },
       },
       comparator: { topology: 'double_tail', sizing: 'manual' }, process: { card: 'generic-23' },
     })
     const said = problems.map((problem) => `${problem.code} ${problem.path}`).sort()
     expect(said).toEqual([
       'missing comparator.widths', 'not_a_choice converter.inl_method', 'not_available_yet comparator.topology',
-      'not_available_yet converter.flash.front_sampler', 'not_available_yet converter.flash.input_style',
+      'not_available_yet converter.flash.input_style',
       'out_of_range converter.resolution_bits', 'out_of_range converter.yield', 'unknown_card process.card', 'unknown_key converter.sample_rate',
       'unknown_key tittle', 'wrong_type converter.sample_rate_hz',
     ])
@@ -107,7 +107,8 @@ describe('what is refused, all of it at once', () => {
   test.each([
     ['resolution of a flash', withConverter({ resolution_bits: 11 }), 'out_of_range', 'converter.resolution_bits'],
     ['resolution of a SAR', { ...smallestSar, converter: { ...smallestSar.converter, resolution_bits: 3 } }, 'out_of_range', 'converter.resolution_bits'],
-    ['several lanes of a SAR', { ...smallestSar, converter: { ...smallestSar.converter, lanes: 2 } }, 'not_available_yet', 'converter.lanes'],
+    ['as many redundant cycles as bits', { ...smallestSar, converter: { ...smallestSar.converter, sar: { redundant_cycles: smallestSar.converter.resolution_bits } } },
+      'out_of_range', 'converter.sar.redundant_cycles'],
     ['no document', null, 'wrong_type', ''],
     ['a list', [], 'wrong_type', ''],
     ['a number', 5, 'wrong_type', ''],

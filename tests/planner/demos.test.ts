@@ -45,8 +45,8 @@ describe('the same plan gives the same result', () => {
 
   it('after enough other plans that nothing is remembered', () => {
     const before = asText(logger)
-    const others = Array.from({ length: 8 }, (_, i): Changes => ({ 'comparator.load_f': (2 + i) * 1e-15, 'comparator.sizing': 'manual', 'comparator.widths': plainWidths }))
-    for (const other of others) planned(changed(sounder, other))
+    const manual: Changes = { 'comparator.sizing': 'manual', 'comparator.widths': plainWidths }
+    for (let i = 0; i < 8; i++) planned(changed(sounder, { ...manual, 'comparator.load_f': (2 + i) * 1e-15 }))
     planned(mast)
     expect(asText(logger)).toBe(before)
   })

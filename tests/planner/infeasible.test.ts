@@ -1,9 +1,10 @@
 import { describe, expect, it } from 'vitest'
-import type { Result } from '../../main/contract/result'
+import type { Limits, Result } from '../../main/contract/result'
 import { cases, hopeless } from './cases'
-import { changed, flashOf, logger, mast, planned, sarOf, sounder, stops, type Changes } from './plans'
+import { changed, flashOf, logger, planned, sarOf, sounder, stops, type Changes } from './plans'
+import { expectRemedies } from './remedies'
 
-/** The stop that each hopeless plan must have, whatever else stops it. */
+/** How the code of the stop starts that each hopeless plan must have, whatever else stops it. */
 const reasons: Readonly<Record<string, string>> = {
   'nothing left of the budget': 'budget_exhausted',
   'nothing left, SAR': 'budget_exhausted',
@@ -12,8 +13,9 @@ const reasons: Readonly<Record<string, string>> = {
   'a ladder that eats all': 'ladder_exhausts_offset',
   'a DAC that misses the yield': 'dac_mismatch_yield',
   'a hopeless rate': 'window_negative',
-  'a common mode of nothing': 'latch_no_regeneration',
-  'no common mode, trimmed, all corners': 'latch_no_regeneration',
+  'no time for a self-timed search': 'window_negative',
+  'a common mode of nothing': 'latch_',
+  'no common mode, trimmed, all corners': 'latch_',
   'a trim of one bit': 'offset_over_limit',
   'widths below the minimum': 'width_below_minimum',
 }
@@ -21,7 +23,7 @@ const reasons: Readonly<Record<string, string>> = {
 describe('what cannot be built stops, and says why', () => {
   it.each(Object.keys(hopeless))('%s', (name) => {
     const result = planned(hopeless[name])
-    expect(stops(result)).toContain(reasons[name])
+    expect(stops(result).filter((code) => code.startsWith(reasons[name])), stops(result).join()).not.toEqual([])
     const severities = result.findings.map((f) => f.severity)
     expect(severities).toEqual([...severities].sort((a, b) => ['stop', 'caution', 'note'].indexOf(a) - ['stop', 'caution', 'note'].indexOf(b)))
   })
@@ -30,12 +32,15 @@ describe('what cannot be built stops, and says why', () => {
 })
 
 describe('limits without a positive solution', () => {
-  const every = (result: Result, look: (limits: Result['comparators'][number]['limits']) => boolean) => result.comparators.every((c) => look(c.limits))
+  const every = (result: Result, look: (limits: Limits) => boolean) => result.comparators.every((c) => look(c.limits))
 
   it('R ≤ 0: both spreads are 0, their use is null and one of them is named', () => {
     const result = planned(hopeless['nothing left of the budget'])
     expect(every(result, (l) => l.noise_v === 0 && l.offset_v === 0 && l.trim_step_v === 0)).toBe(true)
-    expect(result.comparators.every((c) => c.use.noise === null && c.use.offset === null && (c.tightest === 'noise' || c.tightest === 'offset'))).toBe(true)
+    for (const { use, tightest } of result.comparators) {
+      expect([use.noise, use.offset]).toEqual([null, null])
+      expect(['noise', 'offset']).toContain(tightest)
+    }
     const shared = result.budget.filter((line) => ['threshold_spread', 'comparator_noise'].includes(line.item))
     expect(shared.map((line) => line.allowed_v2)).toEqual([0, 0])
   })
@@ -76,26 +81,13 @@ const typical: Changes = { corners: ['typical'] }
 /** Plans that miss something a person can change. */
 const remediable: Readonly<Record<string, unknown>> = {
   'twice the rate': changed(sounder, { ...typical, 'converter.sample_rate_hz': 4e9 }),
-  'a poor ladder': changed(sounder, { ...typical, 'converter.flash.ladder_sigma': 0.03 }),
-  'eight bits without trim': changed(mast, { 'comparator.offset_method': 'size' }),
+  'a poor ladder': changed(sounder, { ...typical, 'converter.flash.ladder_sigma': 0.06 }),
   'a low common mode': changed(logger, { ...typical, 'converter.common_mode_v': 0.3 }),
   'the smallest SAR plan': sarOf(10, 2e7),
 }
 
 describe('remedies', () => {
-  it.each(Object.keys(remediable))('each was tried and works: %s', (name) => {
-    const document = remediable[name]
-    const result = planned(document, {})
-    const found = result.findings.filter((f) => f.severity === 'stop')
-    expect(found.length).toBeGreaterThan(0)
-    for (const { remedy, remedies } of found) expect(remedy).toBe(remedies[0]?.text ?? null)
-    const tried = new Map(found.flatMap((f) => f.remedies).map((r) => [JSON.stringify(r.set), r]))
-    expect(tried.size).toBeGreaterThan(0)
-    for (const { set } of tried.values()) {
-      const values = Object.fromEntries(set.map(({ path, value }) => [path, value]))
-      expect(stops(planned(changed(document, values))), JSON.stringify(values)).toEqual([])
-    }
-  })
+  it.each(Object.keys(remediable))('each was tried and works: %s', (name) => expectRemedies(remediable[name]))
 
   it('only stops have them', () => {
     const result = planned(changed(sounder, { corners: ['typical'] }), {})
@@ -105,12 +97,12 @@ describe('remedies', () => {
 })
 
 describe('the nearest design', () => {
-  it('is shown for each of 1023 comparators in less than a megabyte', () => {
+  it('is shown for each of 1023 comparators in less than a megabyte, with room for remedies', () => {
     for (const changes of [{}, { 'comparator.offset_method': 'trim', corners: ['all'] }]) {
-      const result = planned(flashOf(10, 1e9, changes), {})
+      const result = planned(flashOf(10, 1e9, changes))
       expect(stops(result).length).toBeGreaterThan(0)
       expect(result.comparators).toHaveLength(1023)
-      expect(new TextEncoder().encode(JSON.stringify(result)).length).toBeLessThan(1_000_000)
+      expect(new TextEncoder().encode(JSON.stringify(result)).length).toBeLessThan(980_000)
     }
   })
 

@@ -61,7 +61,8 @@ describe('asking for more never gives more room', () => {
       const base: Changes = { 'converter.yield': given, 'converter.inl_lsb': lsb, 'converter.dnl_lsb': lsb, 'converter.flash.ladder_sigma': 0.01 }
       const plain = flashLimits(base)
       const harder: Changes[] = [
-        { 'converter.yield': (1 + given) / 2 }, { 'converter.inl_lsb': 0.8 * lsb }, { 'converter.dnl_lsb': 0.8 * lsb }, { 'converter.flash.ladder_sigma': 0.02 },
+        { 'converter.yield': (1 + given) / 2 }, { 'converter.inl_lsb': 0.8 * lsb }, { 'converter.dnl_lsb': 0.8 * lsb },
+        { 'converter.flash.ladder_sigma': 0.02 },
       ]
       for (const change of harder) expectNoHigher(plain, flashLimits({ ...base, ...change }), 'offset_v')
     }), runs)
@@ -85,7 +86,8 @@ describe('mismatch', () => {
 
   it('a wider input pair never has more of the offset', () => {
     fc.assert(fc.property(fc.double({ min: 1e-6, max: 8e-6, noNaN: true }), fc.double({ min: 1.1, max: 3, noNaN: true }), (width, by) => {
-      const part = (input_m: number) => planned(flashOf(4, 1e9, { ...manual, 'comparator.widths': { ...plainWidths, input_m } })).design.offset_parts_v.input!
+      const withInput = (input_m: number) => flashOf(4, 1e9, { ...manual, 'comparator.widths': { ...plainWidths, input_m } })
+      const part = (input_m: number) => planned(withInput(input_m)).design.offset_parts_v.input!
       expect(part(width * by)).toBeLessThan(part(width))
     }), runs)
   })
@@ -115,7 +117,8 @@ describe('the bank', () => {
   })
 
   it('sees the common mode fall with a monotonic array, towards a quarter of full scale below', () => {
-    const { comparators } = planned(sarOf(8, 2e7, { ...manual, 'converter.sar.dac_scheme': 'monotonic', 'converter.common_mode_v': 0.7, 'converter.full_scale_v': 0.4 }))
+    const monotonic: Changes = { 'converter.sar.dac_scheme': 'monotonic', 'converter.common_mode_v': 0.7, 'converter.full_scale_v': 0.4 }
+    const { comparators } = planned(sarOf(8, 2e7, { ...manual, ...monotonic }))
     const modes = comparators.map((c) => c.common_mode_v)
     expect(modes[0]).toBe(0.7)
     expect(modes[1]).toBeCloseTo(0.65, 9)

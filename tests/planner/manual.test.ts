@@ -7,7 +7,9 @@ const typedIn = (document: unknown, { design }: Result): unknown => changed(docu
   'comparator.sizing': 'manual', 'comparator.widths': { ...design.widths }, 'comparator.trim_bits': design.trim_bits,
 })
 
-describe.each([['trimmed flash', sounder], ['flash of eight bits', mast], ['SAR', logger]])('widths of an automatic result entered by hand: %s', (_, document) => {
+const documents: [string, unknown][] = [['trimmed flash', sounder], ['flash of eight bits', mast], ['SAR', logger]]
+
+describe.each(documents)('widths of an automatic result entered by hand: %s', (_, document) => {
   const automatic = planned(document)
   const manual = planned(typedIn(document, automatic))
 

@@ -7,7 +7,7 @@ import { mosDevice, mosEvaluate, mosNoise, mosPoint, type MosDevice } from '../.
 import { pairSpread, tapVariance } from '../../main/planner/models/offset/mismatch'
 import { trimCapacitanceChange, trimStep } from '../../main/planner/models/offset/trim'
 import { decisionDelay, metastableOverdrive, neededOverdrive, tauLimit } from '../../main/planner/models/timing/metastability'
-import { cardNamed } from '../independent/engine'
+import { cardNamed } from '../planner/latch/bench'
 import { plainWidths, planned, sarOf } from '../planner/plans'
 import { ladderFeedthrough } from './ladder'
 import rows from './rows.json'

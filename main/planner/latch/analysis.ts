@@ -27,13 +27,16 @@ export interface LatchAnalysis {
   readonly arrival10: number
   /** t_e: when the balanced circuit has come to its equilibrium [s]. */
   readonly settled: number
-  /** |g|: input gain into the dominant mode at t_e. */
+  /** ln|g|: input gain into the dominant mode at t_e. */
+  readonly logGain: number
+  /** |g| and the noise variance P [V²] in that mode, both less the same common factor where |g| would overflow. */
   readonly gain: number
-  /** P: noise variance in that mode [V²]. */
   readonly variance: number
 }
 
 interface Totals {
+  /** ln of the factor taken out of all sums. */
+  readonly takenOut: number
   readonly input: number
   readonly variance: number
   readonly threshold: Float64Array
@@ -84,6 +87,18 @@ function gather(run: Trajectory, at: number, p: Float64Array, weight: number, no
   return inputPart
 }
 
+/** φ is brought back whenever it passes this, and all sums with it; the logarithm of what was taken out is kept. */
+const tooLarge = 1e100
+
+function rescale(phi: Float64Array, sums: Sums, remaining: Float64Array, density: Float64Array): number {
+  const factor = 1 / Math.max(Math.abs(phi[0]), Math.abs(phi[1]))
+  const scale = (values: Float64Array, by: number) => { for (let i = 0; i < values.length; i++) values[i] *= by }
+  for (const values of [phi, sums.threshold, sums.gain, sums.capacitance, remaining, density]) scale(values, factor)
+  sums.input *= factor
+  sums.variance *= factor * factor
+  return -Math.log(factor)
+}
+
 interface Sums { input: number; variance: number; threshold: Float64Array; gain: Float64Array; capacitance: Float64Array }
 
 /**
@@ -103,6 +118,7 @@ function adjointPass(run: Trajectory): Totals {
   const remaining = new Float64Array(steps + 1)
   const density = new Float64Array(steps + 1)
   const row = (i: number) => i * mode.stride
+  let takenOut = 0
   density[steps] = gather(run, row(2 * steps), phi, 1 / equilibrium.growth, 1 / (2 * equilibrium.growth), sums)
   remaining[steps] = sums.input
   for (let i = steps - 1; i >= 0; i--) {
@@ -116,8 +132,9 @@ function adjointPass(run: Trajectory): Totals {
     gather(run, row(2 * i + 1), mid, (2 * h) / 3, (2 * h) / 3, sums)
     density[i] = gather(run, row(2 * i), phi, h / 6, h / 6, sums)
     remaining[i] = sums.input
+    if (Math.abs(phi[0]) > tooLarge || Math.abs(phi[1]) > tooLarge) takenOut += rescale(phi, sums, remaining, density)
   }
-  return { ...sums, start: [phi[0], phi[1]], window: { times: Float64Array.from(times), remaining, density } }
+  return { ...sums, takenOut, start: [phi[0], phi[1]], window: { times: Float64Array.from(times), remaining, density } }
 }
 
 /** Time at which a step arriving then still reaches `fraction` of the full response; cubic between the knots. */
@@ -154,6 +171,7 @@ export function analyseLatch(circuit: Circuit, giveUpAfter: number, departure?: 
   const totals = adjointPass(run)
   const tau = 1 / run.equilibrium.growth
   const g = totals.input
+  const logGain = Math.log(Math.abs(g)) + totals.takenOut
   const delta = departure === undefined ? largeSignalDelay(circuit, run) : departure * tau
   const kT = boltzmann * circuit.temperature
   const initial = totals.start.reduce((sum, p, i) => sum + (p * p * 2 * kT) / circuit.sideCapacitance[i], 0)
@@ -161,7 +179,7 @@ export function analyseLatch(circuit: Circuit, giveUpAfter: number, departure?: 
     Object.fromEntries(run.mode.pairs.map(({ pair }, i) => [pair, -values[i] / g]))
   return {
     tau,
-    integration: run.times[run.times.length - 1] - tau * Math.log(Math.abs(g)) + delta,
+    integration: run.times[run.times.length - 1] - tau * logGain + delta,
     departure: delta / tau,
     noise: Math.sqrt(totals.variance + initial) / Math.abs(g),
     thresholdWeight: named(totals.threshold),
@@ -171,6 +189,7 @@ export function analyseLatch(circuit: Circuit, giveUpAfter: number, departure?: 
     arrival90: arrivalAt(totals.window, 0.9),
     arrival10: arrivalAt(totals.window, 0.1),
     settled: run.times[run.times.length - 1],
+    logGain,
     gain: Math.abs(g),
     variance: totals.variance + initial,
   }

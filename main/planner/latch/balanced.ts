@@ -96,7 +96,7 @@ export function balancedTrajectory(circuit: Circuit, giveUpAfter: number): Traje
       const found = dominantMode(recorder.moments, last, circuit.output)
       const speed = fastest(slopes, net.size)
       if (found.growth > 0 && speed < settled * circuit.supply * found.growth) equilibrium = found
-      else if (found.growth <= 0 && speed * giveUpAfter < 1e-3 * circuit.supply) failure = 'no_regeneration'
+      else if (found.growth <= 0 && t1 - from > giveUpAfter / 100 && speed * (t1 - from) < 1e-4 * circuit.supply) failure = 'no_regeneration'
       return equilibrium !== null || failure !== null
     },
   })

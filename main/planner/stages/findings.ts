@@ -5,7 +5,7 @@ import { droopCapacitance } from '../models/input/load'
 import { tapVariance } from '../models/offset/mismatch'
 import { sarDacSigmaLimit } from '../models/yield/successive'
 import type { Bank } from './bank'
-import { offsetPart, sigmaLimits } from './offset-limits'
+import { offsetPart, sigmaLimits, yieldStep } from './offset-limits'
 import { heldCapacitance } from './situation'
 import { limitKeys } from './uses'
 
@@ -43,20 +43,26 @@ function windowFindings({ positions, s }: Asked): Finding[] {
   const worst = positions.reduce((a, b) => (b.limits.window_s < a.limits.window_s ? b : a))
   if (worst.limits.window_s > 0) return []
   const where = worst.cycle === null ? '' : ` in cycle ${worst.cycle}`
+  const slot = s.kind.architecture === 'flash' ? s.kind.evaluateTime : s.kind.cycleTime
+  const setUp = s.clockUncertainty + s.captureSetup > slot / 2
+  const advice = setUp ? 'Clock uncertainty and capture set-up take most of the slot: plan shorter ones.' : 'Plan a slower rate, more lanes, or faster logic and settling.'
+  const path = setUp ? 'budget.capture_setup_s' : s.kind.architecture === 'flash' ? 'converter.sample_rate_hz' : 'converter.sar.dac_tau_s'
   return [finding('stop', 'window_negative',
-    `No time is left to decide${where}: the window is ${formatSi(worst.limits.window_s, 's')}. Plan a slower rate, more lanes, or faster logic and settling.`,
-    s.kind.architecture === 'flash' ? 'converter.sample_rate_hz' : 'converter.sar.dac_tau_s')]
+    `No time is left to decide${where}: the window is ${formatSi(worst.limits.window_s, 's')}. ${advice}`, path)]
 }
+
+const ladderStop = (sigma: number): Finding => finding('stop', 'ladder_exhausts_offset',
+  `The ladder's own spread of ${formatSi(sigma * 100, '%')} per element uses up the whole INL or DNL yield: nothing is left for the comparators. `
+  + 'Plan better matched elements or wider INL and DNL limits.', 'converter.flash.ladder_sigma')
 
 function ladderFindings({ s, budget }: Asked): Finding[] {
   const { kind, plan } = s
   if (kind.architecture === 'flash') {
     const sigma = kind.flash.ladder_sigma
     const yields = sigmaLimits(s)
+    if (plan.comparator.offset_method === 'trim') return yieldStep(s, sigma) > 0 ? [] : [ladderStop(sigma)]
     const eaten = tapVariance(s.lsb, sigma, s.codes, s.codes / 2) >= yields.inl ** 2 || (s.lsb * sigma) ** 2 / 2 >= yields.dnl ** 2
-    return eaten && offsetPart(s) * budget.spreadPower > 0 ? [finding('stop', 'ladder_exhausts_offset',
-      `The ladder's own spread of ${formatSi(sigma * 100, '%')} per element uses up the whole INL or DNL yield: nothing is left for the comparators. Plan better matched elements or wider INL and DNL limits.`,
-      'converter.flash.ladder_sigma')] : []
+    return eaten && offsetPart(s) * budget.spreadPower > 0 ? [ladderStop(sigma)] : []
   }
   const allowed = sarDacSigmaLimit(s.codes, plan.converter.dnl_lsb, s.laneYield)
   return kind.sar.unit_cap_sigma > allowed ? [finding('stop', 'dac_mismatch_yield',
@@ -76,7 +82,7 @@ function loadFindings({ s }: Bank): Finding[] {
 
 function drawnFindings({ s, design }: Bank): Finding[] {
   const { widths } = design
-  const entries = Object.entries(widths) as [string, number | undefined][]
+  const entries = (Object.entries(widths) as [string, number | undefined][]).filter(([key]) => !key.startsWith('second_'))
   return entries.flatMap(([key, value]) => {
     const least = key === 'input_length_m' ? s.card.l_min_m : key.endsWith('_m') ? s.card.w_min_m : 0
     return value !== undefined && value < least * (1 - 1e-9) ? [finding('stop', key === 'input_length_m' ? 'length_below_minimum' : 'width_below_minimum',
@@ -84,12 +90,26 @@ function drawnFindings({ s, design }: Bank): Finding[] {
   })
 }
 
-function latchFindings({ evaluated }: Bank): Finding[] {
-  return evaluated.filter((e) => e.failure !== null).slice(0, 1).map(({ condition, commonMode, failure }) => finding('stop', `latch_${failure}`,
-    failure === 'no_regeneration'
-      ? `The latch does not regenerate at ${condition.name} with a common mode of ${formatSi(commonMode, 'V')}: its loop gain stays below one.`
-      : `The latch does not get to a decision in any useful time at ${condition.name} with a common mode of ${formatSi(commonMode, 'V')}: raise the common mode or widen the input pair and tail.`,
-    'converter.common_mode_v'))
+/** What most likely keeps a latch from deciding, in the order in which it is looked for. */
+function slownessCause({ s }: Bank, commonMode: number): [string, string] {
+  const { clock_rise_s, load_f } = s.plan.comparator
+  const window = s.plan.converter.lanes / s.plan.converter.sample_rate_hz
+  if (commonMode > s.card.vdd_v) return ['the common mode lies above the supply: lower it', 'converter.common_mode_v']
+  if (clock_rise_s > window / 2) return ['the clock takes longer to rise than there is time to decide: plan a faster edge', 'comparator.clock_rise_s']
+  if (load_f > 1e-12) return [`a load of ${formatSi(load_f, 'F')} on each output is far beyond a latch: put a buffer between`, 'comparator.load_f']
+  if (commonMode <= 0 && s.plan.converter.common_mode_v > 0) return ['the switching of the DAC takes the common mode to ground: plan another DAC scheme or a smaller full scale', 'converter.sar.dac_scheme']
+  if (commonMode < s.card.n.vt_v + 0.1) return ['the common mode hardly turns the input pair on: raise it', 'converter.common_mode_v']
+  return ['widen the input pair and tail, or trim with fewer bits', 'comparator.sizing']
+}
+
+function latchFindings(bank: Bank): Finding[] {
+  return bank.evaluated.filter((e) => e.failure !== null).slice(0, 1).map(({ condition, commonMode, failure }) => {
+    const [cause, path] = slownessCause(bank, commonMode)
+    const place = `at ${condition.name} with a common mode of ${formatSi(commonMode, 'V')}`
+    return finding('stop', `latch_${failure}`, failure === 'no_regeneration'
+      ? `The latch does not regenerate ${place}: its loop gain stays below one; ${cause}.`
+      : `The latch does not get to a decision in any useful time ${place}; ${cause}.`, path)
+  })
 }
 
 const unitOf: Record<LimitName, string> = { time: 's', noise: 'V', offset: 'V', kickback: 'V', memory: 'V', input: 'F' }
@@ -106,6 +126,9 @@ function reachedAndLimit(entry: ComparatorEntry, key: LimitName): [number | null
   }
 }
 
+/** Percent of the limit, or how many times it where percents get unreadable. */
+const shareText = (use: number): string => (use < 10 ? `${formatSi(use * 100, '%')} of the limit` : `${formatSi(use, '')} times the limit`)
+
 const placeOf = (entry: ComparatorEntry): string => (entry.cycle === null ? `comparator ${entry.index}` : `cycle ${entry.cycle}`)
 
 function limitFindings({ entries, s }: Bank): Finding[] {
@@ -117,7 +140,7 @@ function limitFindings({ entries, s }: Bank): Finding[] {
     const what = key === 'offset' && worst.limits.trim_step_v !== null ? 'Trim step' : limitNames[key]
     const path = key === 'input' && s.kind.architecture === 'sar' ? 'budget.dac_load_share' : limitPaths[key]
     return [finding('stop', `${key}_over_limit`,
-      `${what} is over its limit at ${placeOf(worst)}${over.length > 1 ? ` and ${over.length - 1} more` : ''}: ${formatSi(reached, unitOf[key])} of ${formatSi(limit, unitOf[key])}, ${formatSi(worst.use[key]! * 100, '%')} of the limit. This is the nearest design that could be found.`, path)]
+      `${what} is over its limit at ${placeOf(worst)}${over.length > 1 ? ` and ${over.length - 1} more` : ''}: ${formatSi(reached, unitOf[key])} of ${formatSi(limit, unitOf[key])}, ${shareText(worst.use[key]!)}.${s.plan.comparator.sizing === 'auto' ? ' This is the nearest design that could be found.' : ''}`, path)]
   })
 }
 
@@ -125,7 +148,7 @@ function trimFindings({ design, trimConverged, s }: Bank): Finding[] {
   if (design.trim === null) return []
   if (!trimConverged) return [finding('stop', 'trim_range', 'The trim cannot reach the raw offset: the capacitance it needs grows faster than its range. Use a wider input pair.', 'comparator.offset_method')]
   return design.trim.unit <= s.card.cap.trim_unit_f * (1 + 1e-9) ? [finding('note', 'trim_unit_binds',
-    `The smallest trim capacitor that can be drawn, ${formatSi(s.card.cap.trim_unit_f, 'F')}, sets the trim step; more bits would only widen the range.`, 'comparator.trim_bits')] : []
+    `The smallest trim capacitor that can be drawn, ${formatSi(s.card.cap.trim_unit_f, 'F')}, sets the trim step; the number of bits only sets the range.`, 'comparator.trim_bits')] : []
 }
 
 function overrideFindings({ s }: Bank, ledger: Result['ledger']): Finding[] {

@@ -26,10 +26,8 @@ const moreLatches = ({ converter }: Plan): Idea[] =>
 const relaxedErrors = ({ converter }: Plan): Idea[] =>
   converter.error_rate < 1e-6 ? [one(`an error rate of ${tidy(converter.error_rate * 1e4)}`, 'converter.error_rate', tidy(converter.error_rate * 1e4))] : []
 
-const higherCommonMode = ({ converter }: Plan): Idea[] => [1.1, 1.2].map((f) => {
-  const level = tidy(converter.common_mode_v * f)
-  return one(`a common mode of ${formatSi(level, 'V')}`, 'converter.common_mode_v', level)
-})
+const higherCommonMode = ({ converter }: Plan, supply: number): Idea[] => [0.65, 0.75].map((part) => tidy(part * supply))
+  .filter((level) => level > converter.common_mode_v).map((level) => one(`a common mode of ${formatSi(level, 'V')}`, 'converter.common_mode_v', level))
 
 const trimmed = ({ comparator }: Plan): Idea[] => (comparator.offset_method === 'size' ? [one('trim', 'comparator.offset_method', 'trim')]
   : comparator.trim_bits !== null ? [one('as many trim bits as it takes', 'comparator.trim_bits', null)] : [])
@@ -68,11 +66,11 @@ const lighterLadder = ({ converter }: Plan): Idea[] => (converter.architecture =
 const biggerBankShare = ({ converter }: Plan): Idea[] => (converter.architecture === 'flash'
   ? [2].map((f) => tidy(converter.flash!.bank_share * f)).map((v) => one(`a bank share of ${v}`, 'converter.flash.bank_share', v)) : [])
 
-const ideasByCode: Record<string, (plan: Plan) => Idea[]> = {
-  time_over_limit: (p) => [...moreLanes(p), ...moreLatches(p), ...slower(p), ...higherCommonMode(p), ...relaxedErrors(p)],
+const ideasByCode: Record<string, (plan: Plan, supply: number) => Idea[]> = {
+  time_over_limit: (p, supply) => [...moreLanes(p), ...moreLatches(p), ...slower(p), ...higherCommonMode(p, supply), ...relaxedErrors(p)],
   window_negative: (p) => [...moreLanes(p), ...slower(p)],
-  latch_too_slow: (p) => [...higherCommonMode(p), ...slower(p)],
-  latch_no_regeneration: (p) => higherCommonMode(p),
+  latch_too_slow: (p, supply) => [...higherCommonMode(p, supply), ...slower(p)],
+  latch_no_regeneration: higherCommonMode,
   noise_over_limit: (p) => [...fewerBits(p), ...largerCapacitance(p), ...slower(p)],
   offset_over_limit: (p) => [...trimmed(p), ...widerLinearity(p), ...fewerBits(p), ...largerCapacitance(p)],
   kickback_over_limit: (p) => [...lighterLadder(p), ...trimmed(p), ...largerShare(p, 'kick_share', 'kickback share', ' LSB'), ...largerCapacitance(p)],
@@ -85,8 +83,8 @@ const ideasByCode: Record<string, (plan: Plan) => Idea[]> = {
 }
 
 const wanted = 3
-/** Tries that size a latch; those refused by the brief alone cost nothing. */
-const mostTries = 14
+/** Latches sized at one condition and common mode, over all tries; plans refused by the brief alone cost nothing. */
+const mostWork = 32
 const mostChanges = 4
 /** How many of the best incomplete changes are built upon. */
 const keptOpen = 2
@@ -104,13 +102,20 @@ export const applied = (plan: Plan, set: Remedy['set']): Plan => set.reduce((cha
 const both = (a: Idea, b: Idea): Idea => ({ what: a.what === '' ? b.what : `${a.what}, ${b.what}`, set: [...a.set, ...b.set] })
 const touchesSame = (a: Idea, b: Idea): boolean => a.set.some(({ path }) => b.set.some((other) => other.path === path))
 
+/** Whether a change holds all of another that is known to do: then it only costs more. */
+const contains = (idea: Idea, set: Remedy['set']): boolean => set.every((part) => idea.set.some((own) => own.path === part.path && own.value === part.value))
+
 /** Ideas for the stops of a plan, the first of every stop before the second of any; each once. */
-function ideasFor(plan: Plan, codes: readonly string[]): Idea[] {
-  const lists = codes.map((code) => ideasByCode[code]?.(plan) ?? [])
+function ideasFor(plan: Plan, codes: readonly string[], supply: number): Idea[] {
+  const lists = codes.map((code) => ideasByCode[code]?.(plan, supply) ?? [])
   const longest = Math.max(0, ...lists.map((list) => list.length))
-  const mixed = Array.from({ length: longest }, (_, i) => lists.flatMap((list) => list.slice(i, i + 1))).flat()
+  return distinct(Array.from({ length: longest }, (_, i) => lists.flatMap((list) => list.slice(i, i + 1))).flat())
+}
+
+/** Each idea once. */
+function distinct(ideas: readonly Idea[]): Idea[] {
   const seen = new Set<string>()
-  return mixed.filter(({ set }) => !seen.has(JSON.stringify(set)) && seen.add(JSON.stringify(set)))
+  return ideas.filter(({ set }) => !seen.has(JSON.stringify(set)) && seen.add(JSON.stringify(set)))
 }
 
 /** What the search for remedies asks of the planner. */
@@ -118,20 +123,40 @@ export interface Replanner {
   /** 0: a latch that meets everything is found; else how far off the plan is. */
   readonly shortfall: (plan: Plan) => number
   readonly replan: (plan: Plan) => Result
+  /** The card's supply [V]. */
+  readonly supply: number
+  /** Conditions and common modes at which one latch is evaluated. */
+  readonly effort: number
 }
 
 const stopsOf = (result: Result): Finding[] => result.findings.filter((f) => f.severity === 'stop')
 
+/** Part of the allowed error power that the fixed items may take when effective bits are given up for the comparators. */
+const fixedPart = 0.7
+
+/** Effective bits, in tenths, at which the fixed items of the budget leave something for the comparators. */
+function affordableBits({ budget, plan }: Result): Idea[] {
+  const fixed = budget.slice(0, 4).reduce((sum, line) => sum + line.allowed_v2, 0)
+  const enob = Math.floor(10 * 0.5 * Math.log2((fixedPart * plan.converter.full_scale_v ** 2) / (12 * fixed))) / 10
+  return enob >= 1 ? [one(`${enob} effective bits`, 'converter.enob_bits', enob)] : []
+}
+
+/** Stops that smaller devices mend, which trimming allows. */
+const trimHelps = new Set(['offset_over_limit', 'input_over_limit', 'kickback_over_limit'])
+
 interface Open { readonly idea: Idea; readonly shortfall: number }
 
 /** One step of the search: each open change with one more idea; the feasible ones are verified by planning them out. */
-function widen(plan: Plan, open: readonly Idea[], codes: readonly string[], planner: Replanner, found: Remedy[], tries: { left: number }): Open[] {
+function widen(
+  plan: Plan, open: readonly Idea[], first: readonly Idea[], codes: readonly string[], planner: Replanner, found: Remedy[], tries: { left: number },
+): Open[] {
   const next: Open[] = []
   for (const base of open) {
-    const more = ideasFor(applied(plan, base.set), codes).filter((idea) => !touchesSame(base, idea))
-    for (const idea of more.slice(0, ideasAStep)) {
-      if (found.length >= wanted || tries.left <= 0) return next
+    const more = distinct([...first, ...ideasFor(applied(plan, base.set), codes, planner.supply)]).filter((idea) => !touchesSame(base, idea))
+    for (const idea of more.slice(0, base.set.length === 0 && first.length > 0 ? first.length + 2 : ideasAStep)) {
+      if (found.length >= wanted || tries.left < 1) return next
       const change = both(base, idea)
+      if (found.some((one) => contains(change, one.set))) continue
       const shortfall = planner.shortfall(applied(plan, change.set))
       if (shortfall < unmendable) tries.left--
       if (shortfall > 0) { next.push({ idea: change, shortfall }); continue }
@@ -151,10 +176,11 @@ export function withRemedies(result: Result, planner: Replanner): Result {
   if (stops.length === 0) return result
   const codes = stops.map((f) => f.code)
   const found: Remedy[] = []
-  const tries = { left: mostTries }
+  const tries = { left: mostWork / planner.effort }
+  const first = [...(codes.includes('budget_exhausted') ? affordableBits(result) : []), ...(codes.some((code) => trimHelps.has(code)) ? trimmed(result.plan) : [])]
   let open: Idea[] = [{ what: '', set: [] }]
-  for (let changes = 0; changes < mostChanges && found.length < 2 && tries.left > 0; changes++) {
-    const reached = widen(result.plan, open, codes, planner, found, tries)
+  for (let changes = 0; changes < mostChanges && found.length < 2 && tries.left >= 1; changes++) {
+    const reached = widen(result.plan, open, first, codes, planner, found, tries)
     open = reached.sort((a, b) => a.shortfall - b.shortfall).slice(0, keptOpen).map(({ idea }) => idea)
   }
   const remedied = (f: Finding): Finding => (f.severity === 'stop' ? { ...f, remedy: found[0]?.text ?? null, remedies: found } : f)

@@ -8,6 +8,9 @@ import { overlapPerWidth } from '../models/mos/capacitance'
 import { trimStep, uniformSpread } from '../models/offset/trim'
 import { decisionDelay } from '../models/timing/metastability'
 import { conversionDelay } from '../models/timing/self-timed'
+import type { LatchAnalysis } from '../latch/analysis'
+import type { Circuit } from '../latch/circuit'
+import { transientDelay } from '../latch/transient'
 import { designInputCap, type LatchDesign } from './design'
 import { bankCount } from './limits-flash'
 import { searchShape } from './limits-sar'
@@ -61,9 +64,25 @@ function residualOf({ plan }: Situation, raw: number, step: number | null): numb
   return plan.comparator.offset_method === 'autozero' ? raw / plan.comparator.autozero_gain : raw
 }
 
+/** A decision that ends this many τ before the equilibrium is not yet paced by it. */
+const early = 5
+
+/**
+ * Time of one decision [s]: t_0 + τ·ln(V_DD/2v), and not less than the full circuit takes where a large overdrive decides
+ * well before the balanced equilibrium that t_0 and τ belong to (above all at cold slow corners).
+ * @param swing V_DD/a [V]; @param overdrive v at the converter's input [V]
+ */
+export function singleDelay(circuit: Circuit, analysis: LatchAnalysis, swing: number, overdrive: number): { delay: number; transient: boolean } {
+  const linear = decisionDelay(analysis.integration, analysis.tau, swing, overdrive)
+  if (linear > analysis.settled - early * analysis.tau) return { delay: linear, transient: false }
+  const patience = Math.max(analysis.settled, linear) + 20 * analysis.tau
+  const full = transientDelay(circuit, (overdrive * circuit.supply) / swing, patience) ?? patience
+  return full > linear ? { delay: full, transient: true } : { delay: linear, transient: false }
+}
+
 /** Time of one decision, or of all decisions of a self-timed conversion with this latch in every cycle [s]. */
-function delayOf(s: Situation, { analysis }: LatchFigures, swing: number, overdrive: number | null): number {
-  if (overdrive !== null) return decisionDelay(analysis.integration, analysis.tau, swing, overdrive)
+function delayOf(s: Situation, { analysis, circuit }: LatchFigures, swing: number, overdrive: number | null): number {
+  if (overdrive !== null) return singleDelay(circuit, analysis, swing, overdrive).delay
   if (s.kind.architecture !== 'sar') throw new RangeError('only a self-timed search has no overdrive of its own')
   return conversionDelay(searchShape(s, s.kind), analysis, swing, s.plan.converter.error_rate)
 }

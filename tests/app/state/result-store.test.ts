@@ -9,13 +9,14 @@ import type { PlanInput } from '../../../main/contract/plan'
 import { fakeResult } from '../fixtures/fake-result'
 import { flashTrim } from '../fixtures/plans'
 
-interface Asked { readonly revision: number; readonly document: PlanInput; answer(reply?: Reply<unknown>): Promise<void> }
+interface Asked { readonly revision: number; readonly remedies: boolean; readonly document: PlanInput; answer(reply?: Reply<unknown>): Promise<void> }
 
 /** A main side that answers only when the test says so. */
 function heldHost() {
   const asked: Asked[] = []
-  const call = ((_name: string, request: { revision: number; document: PlanInput }) => new Promise((resolve) => {
-    asked.push({
+  const sought: Asked[] = []
+  const call = ((_name: string, request: { revision: number; document: PlanInput; remedies: boolean }) => new Promise((resolve) => {
+    (request.remedies ? sought : asked).push({
       ...request,
       answer: async (reply) => {
         resolve(reply ?? succeed({ result: fakeResult(request.document), revision: request.revision }))
@@ -23,7 +24,7 @@ function heldHost() {
       },
     })
   })) as unknown as Call
-  return { asked, call }
+  return { asked, sought, call }
 }
 
 function started() {
@@ -49,6 +50,19 @@ describe('the result store', () => {
     await asked[3].answer()
     expect(results.get().result?.comparators).toHaveLength(511)
     expect(results.get().planning).toBe(false)
+  })
+
+  it('shows an infeasible plan at once and its remedies when they are found', async () => {
+    const { asked, sought, bits, results } = started()
+    const stopped = { ...fakeResult(flashTrim), findings: [{ severity: 'stop', code: 'time_over_limit', message: 'Too slow.', path: null, remedy: null, remedies: [] }] }
+    await asked[0].answer(succeed({ result: stopped, revision: asked[0].revision }))
+    expect(results.get()).toMatchObject({ planning: false, seeking: true, result: stopped })
+    expect(sought).toHaveLength(1)
+    const remedied = { ...stopped, findings: [{ ...stopped.findings[0], remedy: 'half the rate' }] }
+    await sought[0].answer(succeed({ result: remedied, revision: asked[0].revision }))
+    expect(results.get()).toMatchObject({ seeking: false, result: remedied })
+    bits(7)
+    expect(results.get()).toMatchObject({ planning: true, seeking: false })
   })
 
   it('drops a reply that names another revision', async () => {

@@ -10,7 +10,7 @@ const readable = 5e-6
 
 const documents: Readonly<Record<string, unknown>> = {
   'first demo': sounder,
-  'first demo, two capture latches': changed(sounder, { 'converter.flash.capture_latches': 2 }),
+  'first demo, two capture latches': changed(sounder, { 'converter.flash.capture_latches': 2, corners: ['slow'] }),
   'second demo': mast,
   'second demo, all corners': changed(mast, { corners: ['all'] }),
   'given widths, all corners': changed(sounder, { 'comparator.sizing': 'manual', 'comparator.widths': plainWidths, 'converter.flash.capture_latches': 3 }),

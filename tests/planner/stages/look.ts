@@ -24,7 +24,8 @@ export function benchOf(document: unknown): Bench {
   const { plan, card } = read(document)
   const bank = bankOf(plan, card)
   const spots = bank.s.conditions.flatMap((condition) => bank.demands.map((demand) => ({ condition, demand })))
-  return { bank, spots, bits: bank.design.trim?.bits ?? null, wire: card.cap.wire_f, least: (key) => (key === 'input_length_m' ? card.l_min_m : card.w_min_m) }
+  const least: Bench['least'] = (key) => (key === 'input_length_m' ? card.l_min_m : card.w_min_m)
+  return { bank, spots, bits: bank.design.trim?.bits ?? null, wire: card.cap.wire_f, least }
 }
 
 const worstOf = (appraisals: readonly Appraisal[]): number => Math.max(...appraisals.flatMap((a) => a.uses))
@@ -57,11 +58,12 @@ export function found(bench: Bench): Judged {
 /** One unknown a tenth up or down; where it is 0, a tenth of a node’s wire up; never below what can be drawn. */
 export function steps({ bank, bits, least, wire }: Bench): { name: string; widths: Widths; bits: number | null }[] {
   const { widths } = bank.design
-  const moved = widthKeys.flatMap((key) => [1.1, 0.9].map((f) => ({ name: `${key} × ${f}`, widths: { ...widths, [key]: Math.max(least(key), f * widths[key]) } })))
-  const extra = [1.1, 0.9].map((f) => (widths.extra_cap_f > 0 ? f * widths.extra_cap_f : Math.max(0, f - 1) * wire))
-  const all = [{ name: 'as found', widths }, ...moved, ...extra.map((extra_cap_f) => ({ name: `extra ${extra_cap_f} F`, widths: { ...widths, extra_cap_f } }))]
+  const step = (key: keyof Widths, value: number) => ({ name: `${key} ${value}`, widths: { ...widths, [key]: value } })
+  const moved = widthKeys.flatMap((key) => [1.1, 0.9].map((f) => step(key, Math.max(least(key), f * widths[key]))))
+  const extra = [1.1, 0.9].map((f) => step('extra_cap_f', widths.extra_cap_f > 0 ? f * widths.extra_cap_f : Math.max(0, f - 1) * wire))
+  const all = [{ name: 'as found', widths }, ...moved, ...extra]
   const choices = bits === null ? [null] : bank.s.plan.comparator.trim_bits === null ? [bits, bits + 1, bits - 1].filter((b) => b >= 1) : [bits]
-  return all.flatMap((step) => choices.map((choice) => ({ ...step, name: `${step.name}, ${choice} bits`, bits: choice })))
+  return all.flatMap((one) => choices.map((choice) => ({ ...one, name: `${one.name}, ${choice} bits`, bits: choice })))
 }
 
 /** Uniform numbers from 0 to 1 (mulberry32, T. Ettinger, public domain). */
@@ -80,7 +82,8 @@ function drawDesign({ bank, bits, least }: Bench, random: () => number): { width
   const between = (from: number, to: number) => from * (to / from) ** random()
   const wide = random() < 0.5
   const { widths } = bank.design
-  const width = (key: (typeof widthKeys)[number]) => (wide ? between(least(key), 60 * least(key)) : Math.max(least(key), widths[key] * between(1 / 3, 3)))
+  const width = (key: (typeof widthKeys)[number]) =>
+    (wide ? between(least(key), 60 * least(key)) : Math.max(least(key), widths[key] * between(1 / 3, 3)))
   const entries = widthKeys.map((key) => [key, key === 'input_length_m' ? least(key) * (random() < 0.5 ? 1 : between(1, 4)) : width(key)])
   const extra_cap_f = random() < 0.4 ? 0 : between(5e-17, 5e-15)
   const choice = bits === null || bank.s.plan.comparator.trim_bits !== null ? bits : Math.max(1, bits + Math.floor(4 * random()) - 2)
@@ -118,5 +121,6 @@ export function searchAtRandom(bench: Bench, wanted: number, seed: number): { dr
 /** With the smallest trim a latch is faster and noisier than with the one it needs: only clear misses count then. */
 function fallsShort({ figures, uses: [time, noise, offset, kickback, memory, input] }: Appraisal, trimmed: boolean): boolean {
   if (figures === null) return true
-  return Math.max(kickback, input) > 1 || (trimmed ? Math.max(0.9 * time, 0.8 * noise, 0.5 * memory) : Math.max(0.98 * time, noise, offset, 0.98 * memory)) > 1
+  const settled = trimmed ? [0.9 * time, 0.8 * noise, 0.5 * memory] : [0.98 * time, noise, offset, 0.98 * memory]
+  return Math.max(kickback, input, ...settled) > 1
 }

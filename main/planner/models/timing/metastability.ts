@@ -11,12 +11,15 @@ export const metastableOverdrive = (errorRate: number, lsb: number): number => (
 export const searchOverdrive = (errorRate: number, steps: readonly number[]): number =>
   errorRate / steps.reduce((sum, step) => sum + 1 / step, 0)
 
+/** Below this a double loses digits; far below any physical overdrive [V]. */
+const leastOverdrive = 1e-290
+
 /**
  * What the comparator itself must resolve when n pipelined latches follow: min(Δ/2, v·exp(n·T_ev/τ_c)) [V].
  * @param evaluate T_ev, time a capture latch has [s]; @param captureTau τ_c of the library latch [s]
  */
 export const neededOverdrive = (overdrive: number, lsb: number, latches: number, evaluate: number, captureTau: number): number =>
-  Math.min(lsb / 2, overdrive * Math.exp((latches * evaluate) / captureTau))
+  Math.min(lsb / 2, Math.max(leastOverdrive, overdrive * Math.exp((latches * evaluate) / captureTau)))
 
 /** Decision delay t_d(v) = t_0 + τ·ln(V_DD/2v) [s]. */
 export const decisionDelay = (integration: number, tau: number, supply: number, overdrive: number): number =>

@@ -13,6 +13,7 @@ import { unknownSpace, widthUnknowns } from './unknowns'
 const margin = 0.003
 const passes = 6
 const roughPasses = 3
+const nearPasses = 2
 /** Gain that a step of the search must promise, while the number of bits is open and after. */
 const roughGain = 1e-3
 const fineGain = 2e-4
@@ -24,7 +25,7 @@ const repeats = 3
 const startSizes = [1, 6]
 const usualBits = 5
 /** Worst use after the relaxed search above which whole bits will not help, and above which another start will not. */
-const outOfReach = 1.15
+const outOfReach = 1.05
 const hopeless = 1.6
 const sizesKept = 24
 
@@ -79,8 +80,8 @@ function refine(s: Situation, spots: readonly Spot[], from: Candidate, trim: fal
     const { appraisals, calibration } = calibrate(s, design, spots)
     if (calibration === null) return candidate
     candidate = { design, appraisals, calibration }
-    if (worstUse(appraisals) > hopeless) break
     const known = new Set(working.map(spotName))
+    if (worstUse(appraisals.filter((a) => known.has(spotName(a)))) > hopeless) break
     const added = appraisals.filter((a) => a.uses.some((use) => use > 1) && !known.has(spotName(a)))
     working = [...working, ...added]
     if (added.length === 0 && !missed(candidate) && (settled || costOfCandidate(s, candidate) > worthwhile * before)) break
@@ -155,21 +156,44 @@ function sizeFrom(s: Situation, spots: readonly Spot[], start: Candidate): { fou
   return { found: finished.reduce<Built | null>(cheaper, null), miss }
 }
 
+const startBits = ({ plan }: Situation): number | null => (plan.comparator.offset_method === 'trim' ? plan.comparator.trim_bits ?? usualBits : null)
+
 function startCandidate(s: Situation, spots: readonly Spot[], demands: readonly Demand[], size: number): Candidate | null {
-  const bits = s.plan.comparator.offset_method === 'trim' ? s.plan.comparator.trim_bits ?? usualBits : null
-  const design = startDesign(s, demands, bits, size)
+  const design = startDesign(s, demands, startBits(s), size)
   const { appraisals, calibration } = calibrate(s, design, spots)
   return calibration === null ? null : { design, appraisals, calibration }
+}
+
+/** The design whose worst use is smallest, on the spots that can bind and those found wanting. */
+function lowest(s: Situation, spots: readonly Spot[], start: Candidate, trim: false | number | 'free'): Candidate {
+  let candidate = start
+  let working = bindingSpots(start.appraisals, start.calibration.energySpot)
+  for (let pass = 0; pass < nearPasses; pass++) {
+    const options = { trim, margin: 0, iterations: 35, radius: pass === 0 ? 1 : 0.3, gain: roughGain }
+    const design = nearestDesign(s, working, candidate.calibration, candidate.design, options)
+    const { appraisals, calibration } = calibrate(s, design, spots)
+    if (calibration === null) break
+    candidate = { design, appraisals, calibration }
+    const known = new Set(working.map(spotName))
+    const reached = worstUse(appraisals.filter((a) => known.has(spotName(a))))
+    const added = appraisals.filter((a) => !known.has(spotName(a)) && a.uses.some((use) => use > 1.01 * reached))
+    if (added.length === 0) break
+    working = [...working, ...added]
+  }
+  return candidate
 }
 
 /** The design that comes nearest to meeting everything. */
 function nearest(s: Situation, spots: readonly Spot[], start: Candidate): Sized {
   const fixed = s.plan.comparator.trim_bits
-  const trim = start.design.trim === null ? false : fixed ?? 'free'
-  const found = nearestDesign(s, spots, start.calibration, start.design, { trim, margin: 0, iterations: 60, radius: 1, gain: 1e-3 })
-  const whole = found.trim === null ? found : { ...found, trim: { ...found.trim, bits: Math.max(1, Math.round(found.trim.bits)) } }
-  const finished = built(s, spots, { ...start, design: whole })
-  return { design: finished.design, feasible: false, trimConverged: finished.trimConverged }
+  const relaxed = lowest(s, spots, start, start.design.trim === null ? false : fixed ?? 'free')
+  const finished = bitChoices(s, relaxed.design).map((bits) => {
+    if (bits === false || fixed !== null) return built(s, spots, relaxed)
+    const whole: LatchDesign = { widths: relaxed.design.widths, trim: { bits, unit: relaxed.design.trim!.unit } }
+    return built(s, spots, lowest(s, spots, { ...relaxed, design: whole }, bits))
+  })
+  const best = finished.reduce((a, c) => (worstUse(c.appraisals) < worstUse(a.appraisals) ? c : a))
+  return { design: best.design, feasible: false, trimConverged: best.trimConverged }
 }
 
 /** The cheapest design that meets every limit, from the first start that leads to one; else how far the search stayed from one. */
@@ -196,7 +220,7 @@ export function sizeLatch(s: Situation, demands: readonly Demand[]): Sized {
   if (design !== null) return { design, feasible: true, trimConverged: true }
   const spots = spotsOf(s, demands)
   const start = startCandidate(s, spots, demands, startSizes[0]) ?? startCandidate(s, spots, demands, startSizes[1])
-  return start === null ? { design: startDesign(s, demands, null, 1), feasible: false, trimConverged: true } : nearest(s, spots, start)
+  return start === null ? { design: startDesign(s, demands, startBits(s), 1), feasible: false, trimConverged: true } : nearest(s, spots, start)
 }
 
 /** Given widths as they stand; only an open number of trim bits is found. */

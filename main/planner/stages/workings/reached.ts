@@ -6,7 +6,7 @@ import { drawnDevices, designInputCap } from '../design'
 import type { LatchFigures } from '../latch-figures'
 import type { Evaluated } from '../reached'
 import { attainedAt } from '../reached'
-import { attenuationOf, type Attained } from '../uses'
+import { attenuationOf, singleDelay, type Attained } from '../uses'
 import { kickbackWorking } from './kickback'
 import { gatePerWidth } from '../../models/mos/capacitance'
 import { numbers, working } from './working'
@@ -24,7 +24,7 @@ function latchWorkings(at: (read: (f: LatchFigures) => number) => Evaluated): Wo
   return [
     working('reached.tau_s', `Regeneration, ${slow.condition.name}`, 'τ = 1 / λ_max(A) at the balanced equilibrium', numbers`1 / ${1 / a.tau}`, a.tau, 's', references.engine),
     working('reached.integration_s', `Integration, ${late.condition.name}`, 't_0 = t_e − τ·ln|g| + δ',
-      numbers`${b.settled} - ${b.tau} * ln(${b.gain}) + ${b.departure * b.tau}`, b.integration, 's',
+      numbers`${b.settled} - ${b.tau} * ${b.logGain} + ${b.departure * b.tau}`, b.integration, 's',
       `${references.engine}; t_e equilibrium reached, g gain into the growing mode, δ large-signal stretch up to V_DD/2 by full transient`),
     working('reached.aperture_s', `Input aperture, 10–90 %, ${wide.condition.name}`, 't(10 %) − t(90 %) of the response over the arrival of an input step',
       numbers`${c.arrival10} - ${c.arrival90}`, c.arrival10 - c.arrival90, 's', references.engine),
@@ -44,6 +44,11 @@ function delayWorking(bank: Bank, point: Evaluated, entry: ComparatorEntry, a: n
       ? working('reached.delay_s', title, 'B at which P(B) = P_e, the latch as it is in each cycle', numbers`${delay}`, delay, 's', references.tail)
       : working('reached.delay_s', title, 'K·t_0 + τ·β with P(β) = P_e in units of τ',
         numbers`${count} * ${analysis.integration} + ${analysis.tau} * ${(delay - count * analysis.integration) / analysis.tau}`, delay, 's', references.tail)
+  }
+  const { circuit } = point.figures!
+  if (singleDelay(circuit, analysis, supply / a, overdrive_v!).transient) {
+    return working('reached.delay_s', `Decision, ${name}`, 'full circuit: decided before its balanced equilibrium, later than t_0 + τ·ln(V_DD / 2v) says',
+      numbers`${delay}`, delay, 's', references.transient)
   }
   return working('reached.delay_s', `Decision, ${name}`, kind.architecture === 'sar' ? 't_0 + τ·ln(V_DD / 2av)' : 't_0 + τ·ln(V_DD / 2v)',
     numbers`${analysis.integration} + ${analysis.tau} * ln(${supply} / (2 * ${a * overdrive_v!}))`, delay, 's', references.veendrick)

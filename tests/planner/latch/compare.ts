@@ -1,9 +1,9 @@
-import { cycleEnergy, evaluateFully, leftoverAtInput } from '../../main/planner/latch/cycle'
-import { transientDelay } from '../../main/planner/latch/transient'
-import { decisionDelay } from '../../main/planner/models/timing/metastability'
-import { energyPerCycle, resetLeftover } from './cycle'
-import { delayAt, offsetEquivalent, regenerationTime } from './decision'
-import { analysed, engineCircuit, pairs, settingOfBench, type Bench } from './engine'
+import { cycleEnergy, evaluateFully, leftoverAtInput } from '../../../main/planner/latch/cycle'
+import { transientDelay } from '../../../main/planner/latch/transient'
+import { decisionDelay } from '../../../main/planner/models/timing/metastability'
+import { energyPerCycle, resetLeftover } from '../../independent/cycle'
+import { delayAt, offsetEquivalent, regenerationTime } from '../../independent/decision'
+import { analysed, engineCircuit, pairs, settingOfBench, type Bench } from './bench'
 
 /** One number of the engine beside the independent one; `room` is how far apart they may be. */
 export interface Compared { what: string; engine: number; independent: number; room: number }
@@ -21,7 +21,8 @@ export function compareDelays({ engine, independent }: Sides): Compared[] {
   const circuit = engineCircuit(engine)
   const { tau, integration } = analysed(circuit)
   const setting = settingOfBench(independent)
-  const linear = engine.linear.map((v) => relative(`delay at ${v} V by the formula`, decisionDelay(integration, tau, circuit.supply, v), delayAt(setting, v), 0.02))
+  const byFormula = (v: number) => decisionDelay(integration, tau, circuit.supply, v)
+  const linear = engine.linear.map((v) => relative(`delay at ${v} V by the formula`, byFormula(v), delayAt(setting, v), 0.02))
   const full = [1e-4, 1e-3, 1e-2, 5e-2].map((v) =>
     relative(`delay at ${v} V by the transient`, transientDelay(circuit, v, patience) ?? Infinity, delayAt(setting, v), 0.01))
   return [relative('regeneration', tau, regenerationTime(setting), 0.005), ...linear, ...full]
@@ -42,9 +43,10 @@ export function compareOffsets({ engine, independent }: Sides): Compared[] {
     const { threshold: volts, gain: part } = engine.mismatch
     const byThreshold = volts * offsetEquivalent(setting, { what: 'vt', pair: theirs, amount: volts })
     const byGain = part * offsetEquivalent(setting, { what: 'kp', pair: theirs, amount: part })
+    const room = (offset: number, floor: number) => Math.max(0.01 * Math.abs(offset), floor * unread)
     return [
-      { what: `V_T of ${ours}`, engine: volts * thresholdWeight[ours]!, independent: byThreshold, room: Math.max(0.01 * Math.abs(byThreshold), volts * unread) },
-      { what: `k_p of ${ours}`, engine: part * gainWeight[ours]!, independent: byGain, room: Math.max(0.01 * Math.abs(byGain), part * currentOverConductance * unread) },
+      { what: `V_T of ${ours}`, engine: volts * thresholdWeight[ours]!, independent: byThreshold, room: room(byThreshold, volts) },
+      { what: `k_p of ${ours}`, engine: part * gainWeight[ours]!, independent: byGain, room: room(byGain, part * currentOverConductance) },
     ]
   })
 }
@@ -84,7 +86,7 @@ export function compareMemory({ engine, independent }: Sides): Compared[] {
     const resetTime = rises * setting.clock_rise_s
     const left = resetLeftover(setting, resetTime, littleOverdrive)
     const expected = Math.abs(startWeight[0] * left.internal_v + startWeight[1] * left.output_v)
-    return { what: `memory after ${rises} clock rises`, engine: leftoverAtInput(circuit, state, resetTime, startWeight).atInput, independent: expected, room: 0.02 * expected }
+    return relative(`memory after ${rises} clock rises`, leftoverAtInput(circuit, state, resetTime, startWeight).atInput, expected, 0.02)
   })
 }
 

@@ -1,11 +1,11 @@
-import { builtInCard } from '../../main/documents/cards'
-import type { Card } from '../../main/contract/cards'
-import type { CornerName } from '../../main/contract/choices'
-import { analyseLatch, type LatchAnalysis } from '../../main/planner/latch/analysis'
-import type { Circuit, PairName } from '../../main/planner/latch/circuit'
-import { conditionsOf } from '../../main/planner/latch/condition'
-import { strongArm } from '../../main/planner/latch/strong-arm'
-import type { Pair, Setting, Widths } from './setting'
+import { builtInCard } from '../../../main/documents/cards'
+import type { Card } from '../../../main/contract/cards'
+import type { CornerName } from '../../../main/contract/choices'
+import { analyseLatch, type LatchAnalysis } from '../../../main/planner/latch/analysis'
+import type { Circuit, PairName } from '../../../main/planner/latch/circuit'
+import { conditionsOf } from '../../../main/planner/latch/condition'
+import { strongArm } from '../../../main/planner/latch/strong-arm'
+import type { Pair, Setting, Widths } from '../../independent/setting'
 
 /** One strong-arm latch, described once for the engine and once for the independent integration. */
 export interface Bench {
@@ -73,7 +73,10 @@ const typicalBench = (id: string, commonMode: number, widths: Widths, load: numb
 
 /** The same latch starved: regeneration is fast at first and slow at the equilibrium, so the linear region ends early. */
 const starved = (bench: Bench): Bench =>
-  ({ ...bench, name: `${bench.card.id}, slow and cold, common mode ${bench.commonMode} V`, corner: 'slow', cold: true, linear: [1e-5, 1e-4], mismatch: { threshold: 1e-3, gain: 0.002 } })
+  ({
+    ...bench, name: `${bench.card.id}, slow and cold, common mode ${bench.commonMode} V`, corner: 'slow', cold: true,
+    linear: [1e-5, 1e-4], mismatch: { threshold: 1e-3, gain: 0.002 },
+  })
 
 /** Two cards, each at a low and a high common mode, and the cold slow corner of one. */
 export const benches: readonly Bench[] = [

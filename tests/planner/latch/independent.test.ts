@@ -1,12 +1,14 @@
 import { describe, expect, it } from 'vitest'
 import { apart, compareDelays, compareEnergy, compareMemory, compareNodes, compareOffsets, type Compared, type Sides } from './compare'
-import { analysed, benches, engineCircuit, settingOfBench, type Bench } from './engine'
-import { noiseSigma } from './noise'
+import { analysed, benches, engineCircuit, settingOfBench, type Bench } from './bench'
+import { noiseSigma } from '../../independent/noise'
 
 const same = (bench: Bench): Sides => ({ engine: bench, independent: bench })
 
 function expectTogether(compared: readonly Compared[]): void {
-  for (const c of compared) expect(Math.abs(c.engine - c.independent), `${c.what}: engine ${c.engine}, independent ${c.independent}`).toBeLessThanOrEqual(c.room)
+  for (const { what, engine, independent, room } of compared) {
+    expect(Math.abs(engine - independent), `${what}: engine ${engine}, independent ${independent}`).toBeLessThanOrEqual(room)
+  }
 }
 
 describe.each(benches)('the engine and the full circuit agree: $name', (bench) => {
