@@ -91,7 +91,7 @@ function scientific({ digits, exponent }: Decimal, minus: string): string {
 /** The power of ten that a unit is shown with, or null when the number stands plain. */
 function displayExponent(exponent: number, unit: string): number | null {
   if (unit === 'm²') return exponent >= -9 ? -6 : -12
-  if (squared.test(unit)) return fit(Math.floor(exponent / 6) * 6, 2)
+  if (squared.test(unit)) return fit(Math.floor((exponent + 3) / 6) * 6, 2)
   return prefixable.test(unit) ? fit(Math.floor(exponent / 3) * 3, 1) : null
 }
 

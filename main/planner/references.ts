@@ -11,6 +11,7 @@ export const references = {
   enz: 'C. C. Enz, F. Krummenacher, E. A. Vittoz, An Analytical MOS Transistor Model, Analog Integr. Circuits Signal Process. 8, 1995 (interpolation form)',
   plassche: 'R. van de Plassche, CMOS Integrated Analog-to-Digital and Digital-to-Analog Converters, 2nd ed., 2003',
   nyquist: 'H. Nyquist, Thermal Agitation of Electric Charge in Conductors, Phys. Rev. 32, 1928',
+  wicht: 'after B. Wicht, T. Nirschl, D. Schmitt-Landsiedel, Yield and Speed Optimization of a Latch-Type Voltage Sense Amplifier, IEEE JSSC 39(7), 2004 (form from memory)',
   walden: 'R. H. Walden, Analog-to-Digital Converter Survey and Analysis, IEEE JSAC 17(4), 1999',
   schreier: 'R. Schreier, G. C. Temes, Understanding Delta-Sigma Data Converters, 2005',
   liu: 'C.-C. Liu et al., A 10-bit 50-MS/s SAR ADC With a Monotonic Capacitor Switching Procedure, IEEE JSSC 45(4), 2010',

@@ -15,7 +15,7 @@ function quantityWorkings({ s }: Bank): Working[] {
     working('quantities.comparator_count', 'Comparators', s.kind.architecture === 'flash' ? 'lanes · (2^N − 1)' : 'lanes · comparators of a lane',
       s.kind.architecture === 'flash' ? numbers`${s.lanes} * (2^${s.bits} - 1)` : numbers`${s.lanes} * ${s.kind.perLane}`,
       s.comparatorCount, '', references.definition),
-    working('quantities.decision_rate_hz', 'Decisions of the bank', 'decisions per sample · f_s', numbers`${perSample} * ${rate}`, s.decisionRate, '1/s', references.definition),
+    working('quantities.decision_rate_hz', 'Decisions of the bank', 'decisions per sample · f_s', numbers`${perSample} * ${rate}`, s.decisionRate, 'Hz', references.definition),
     working('quantities.error_power_allowed_v2', 'Error power allowed', 'P_allow = V_FS² / (12 · 4^ENOB)',
       numbers`${s.fullScale}^2 / (12 * 4^${s.plan.converter.enob_bits})`, s.fullScale ** 2 / (12 * 4 ** s.plan.converter.enob_bits), 'V²', references.ieee1241),
   ]

@@ -7,6 +7,7 @@ import type { LatchFigures } from '../latch-figures'
 import type { Evaluated } from '../reached'
 import { attainedAt } from '../reached'
 import { attenuationOf, singleDelay, type Attained } from '../uses'
+import { handWorkings } from './hand'
 import { kickbackWorking } from './kickback'
 import { gatePerWidth } from '../../models/mos/capacitance'
 import { numbers, working } from './working'
@@ -135,5 +136,6 @@ export function reachedWorkings(bank: Bank, entry: ComparatorEntry): Working[] {
     working('reached.input_cap_f', 'Input capacitance per side', 'W_in (c_ox L_in + 2 c_f)', numbers`${design.widths.input_m} * ${gatePerWidth(s.card, design.widths.input_length_m)}`, inputCap, 'F', 'linear gate capacitance of the card'),
     energyWorking(worstBy(points, (p) => p.energy!)),
     areaWorking(bank, entry),
+    ...handWorkings(bank, held((r) => r.delay), entry),
   ]
 }
