@@ -23,7 +23,7 @@ export const choices = {
   'converter.sar.dac_scheme': { label: 'DAC scheme', help: 'How the capacitor array is switched; sets its size and energy.',
     options: { conventional: 'Conventional', split_capacitor: 'Split capacitor', monotonic: 'Monotonic', common_mode_based: 'Common-mode based' } },
   'comparator.topology': { label: 'Topology', help: 'The circuit of the latch.',
-    options: { strong_arm: 'Strong-arm', double_tail: 'Double tail' }, later: ['double_tail'] },
+    options: { strong_arm: 'Strong-arm', double_tail: 'Double tail' } },
   'comparator.sizing': { label: 'Sizing', help: 'Let the planner find the widths, or evaluate yours as they stand.',
     options: { auto: 'Automatic', manual: 'Manual' } },
   'comparator.objective': { label: 'Objective', help: 'What automatic sizing makes small.',

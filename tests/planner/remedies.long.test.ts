@@ -6,7 +6,6 @@ it.each([
   ['eight bits without trim', changed(mast, { 'comparator.offset_method': 'size' })],
   ['twice the rate at all corners', changed(sounder, { 'converter.sample_rate_hz': 4e9 })],
   ['too many effective bits', changed(sounder, { 'converter.enob_bits': 6 })],
-  ['little memory allowed', changed(logger, { 'budget.memory_share': 0.01 })],
   ['a monotonic search', changed(logger, { 'converter.sar.dac_scheme': 'monotonic', corners: ['typical'] })],
   ['the smallest flash plan', flashOf(6, 1e9)],
   ['a fast search', sarOf(8, 4e8)],

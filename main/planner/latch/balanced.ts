@@ -24,9 +24,18 @@ export type LatchFailure = 'no_regeneration' | 'too_slow'
 const relative = 5e-6
 const absolute = 2e-6
 const settled = 2e-5
-const maxSteps = 4000
+const maxSteps = 8000
 /** Longest step in units of the dominant growth or decay time: keeps the quadratures along the trajectory below 1e-4. */
 const stepReach = 1.4
+
+/** The fast mode may pass this many times within a step, but is not followed into steps this much shorter than the slow one's. */
+const fastReach = 3
+const shortest = 0.004
+
+function longestStep(a: Float64Array, at: number, slow: number): number {
+  const norm = Math.max(Math.abs(a[at]) + Math.abs(a[at + 1]), Math.abs(a[at + 2]) + Math.abs(a[at + 3]))
+  return Math.min(stepReach / slow, Math.max(fastReach / norm, shortest / slow))
+}
 
 interface Recorder { times: number[]; moments: Float64Array; count: number }
 
@@ -85,7 +94,7 @@ export function balancedTrajectory(circuit: Circuit, giveUpAfter: number): Traje
   }, {
     from, to: giveUpAfter, start: net.start, relative, absolute, maxSteps,
     firstStep: circuit.clockRise / 20, breaks: [circuit.clockRise / 2],
-    longestStep: () => stepReach / Math.abs(dominantMode(recorder.moments, last, circuit.output).growth),
+    longestStep: () => longestStep(recorder.moments, last, Math.abs(dominantMode(recorder.moments, last, circuit.output).growth)),
     onStep: ({ t0, t1, y0, y1, f0, f1 }) => {
       const h = t1 - t0
       for (let i = 0; i < net.size; i++) middle[i] = (y0[i] + y1[i]) / 2 + (h / 8) * (f0[i] - f1[i])

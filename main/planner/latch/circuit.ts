@@ -33,6 +33,8 @@ export interface Circuit {
   readonly sharedCapacitance: readonly number[]
   readonly sideStart: readonly number[]
   readonly sharedStart: readonly number[]
+  /** Shared nodes after a finished decision [V]. */
+  readonly sharedDecided: readonly number[]
   readonly devices: readonly CircuitDevice[]
   readonly supply: number
   readonly commonMode: number

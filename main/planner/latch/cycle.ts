@@ -10,6 +10,7 @@ const patience = 3000
 export function decidedState(circuit: Circuit): FullState {
   const nodes = new Float64Array(2 * circuit.sideNodes.length + circuit.sharedNodes.length)
   nodes[circuit.sideNodes.length + circuit.output] = circuit.supply
+  nodes.set(circuit.sharedDecided, 2 * circuit.sideNodes.length)
   return { nodes, charge: 0 }
 }
 

@@ -31,11 +31,12 @@ export function expm2(o11: number, o12: number, o21: number, o22: number, into: 
   const d = (o11 - o22) / 2
   const delta = d * d + o12 * o21
   const root = Math.sqrt(Math.abs(delta))
-  const even = delta >= 0 ? Math.cosh(root) : Math.cos(root)
-  const odd = root < 1e-6 ? 1 + delta / 6 : (delta >= 0 ? Math.sinh(root) : Math.sin(root)) / root
-  const e = Math.exp(s)
-  into[0] = e * (even + odd * d)
-  into[1] = e * odd * o12
-  into[2] = e * odd * o21
-  into[3] = e * (even - odd * d)
+  // e^(s ± √δ) apart: e^s·cosh√δ would be 0·∞ once one mode has died out within the step.
+  const [up, down] = delta >= 0 ? [Math.exp(s + root), Math.exp(s - root)] : [Math.exp(s), Math.exp(s)]
+  const even = delta >= 0 ? (up + down) / 2 : up * Math.cos(root)
+  const odd = root < 1e-6 ? Math.exp(s) * (1 + delta / 6) : delta >= 0 ? (up - down) / (2 * root) : (up * Math.sin(root)) / root
+  into[0] = even + odd * d
+  into[1] = odd * o12
+  into[2] = odd * o21
+  into[3] = even - odd * d
 }

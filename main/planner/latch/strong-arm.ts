@@ -40,6 +40,7 @@ export function strongArm(setting: LatchSetting): Circuit {
     sharedCapacitance: [tail],
     sideStart: [condition.supply, condition.supply],
     sharedStart: [Math.max(0, (setting.commonMode - condition.n.threshold) / condition.n.slope)],
+    sharedDecided: [0],
     devices: devices(setting),
     supply: condition.supply,
     commonMode: setting.commonMode,

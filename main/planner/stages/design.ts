@@ -1,4 +1,5 @@
 import type { Widths } from '../../contract/plan'
+import { topologies, widthsOf } from '../latch/topologies'
 import { balancedTrim } from '../models/offset/trim'
 import { gatePerWidth } from '../models/mos/capacitance'
 import { inputCapacitance } from '../models/input/load'
@@ -17,14 +18,10 @@ export const trimCapacitanceOf = ({ trim }: LatchDesign): number => (trim === nu
 export const designInputCap = (s: Situation, { widths }: LatchDesign): number =>
   inputCapacitance(widths.input_m, gatePerWidth(s.card, widths.input_length_m))
 
-/** Every device of one strong-arm comparator as drawn. */
-export function drawnDevices(s: Situation, { widths: w }: LatchDesign): DrawnDevice[] {
-  const length = s.card.l_min_m
-  return [
-    { width: w.input_m, length: w.input_length_m, count: 2 },
-    { width: w.cross_n_m, length, count: 2 },
-    { width: w.cross_p_m, length, count: 2 },
-    { width: w.tail_m, length, count: 1 },
-    { width: w.reset_m, length, count: 4 },
-  ]
+/** Every device of one comparator as drawn. */
+export function drawnDevices(s: Situation, { widths }: LatchDesign): DrawnDevice[] {
+  const { topology } = s.plan.comparator
+  return widthsOf(topology).map((key) => ({
+    width: widths[key]!, length: key === 'input_m' ? widths.input_length_m : s.card.l_min_m, count: topologies[topology].drawn[key]!,
+  }))
 }

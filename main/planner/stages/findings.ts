@@ -82,7 +82,8 @@ function loadFindings({ s }: Bank): Finding[] {
 
 function drawnFindings({ s, design }: Bank): Finding[] {
   const { widths } = design
-  const entries = (Object.entries(widths) as [string, number | undefined][]).filter(([key]) => !key.startsWith('second_'))
+  const entries = (Object.entries(widths) as [string, number | undefined][])
+    .filter(([key]) => s.plan.comparator.topology === 'double_tail' || !key.startsWith('second_'))
   return entries.flatMap(([key, value]) => {
     const least = key === 'input_length_m' ? s.card.l_min_m : key.endsWith('_m') ? s.card.w_min_m : 0
     return value !== undefined && value < least * (1 - 1e-9) ? [finding('stop', key === 'input_length_m' ? 'length_below_minimum' : 'width_below_minimum',

@@ -4,7 +4,7 @@ import type { LatchFailure } from '../latch/balanced'
 import type { Circuit, CircuitDevice, PairName } from '../latch/circuit'
 import type { Condition } from '../latch/condition'
 import { decidedState, leftoverAtInput, type Leftover } from '../latch/cycle'
-import { strongArm } from '../latch/strong-arm'
+import { topologies } from '../latch/topologies'
 import type { FullState } from '../latch/transient'
 import { pairSpread } from '../models/offset/mismatch'
 import { trimCapacitanceOf, type LatchDesign } from './design'
@@ -33,10 +33,10 @@ export interface LatchFigures {
   readonly leftover: Leftover
 }
 
-/** The circuit of a design; `strong_arm` is the topology that the plan may choose today. */
+/** The circuit of a design in the topology of the plan. */
 export function circuitOf(s: Situation, design: LatchDesign, condition: Condition, commonMode: number): Circuit {
   const { load_f, clock_rise_s } = s.plan.comparator
-  return strongArm({
+  return topologies[s.plan.comparator.topology].circuit({
     card: s.card, condition, widths: design.widths, commonMode, load: load_f, clockRise: clock_rise_s, trimCapacitance: trimCapacitanceOf(design),
   })
 }

@@ -1,7 +1,6 @@
 import { digits as n } from './digits'
 import type { LedgerItem } from '../../contract/choices'
 import type { Condition } from '../latch/condition'
-import { gatePerWidth } from '../models/mos/capacitance'
 import { meanSwitchingEnergy } from '../models/dac/switching-energy'
 import { totalWidth } from '../models/ledger/area'
 import {
@@ -9,6 +8,7 @@ import {
 } from '../models/ledger/power'
 import type { Bank } from './bank'
 import { designInputCap, drawnDevices } from './design'
+import { circuitOf } from './latch-figures'
 import { bankCount } from './limits-flash'
 import { comparatorArea, trimArea } from './sizing/cost'
 import type { FlashSituation, SarSituation } from './situation'
@@ -27,7 +27,7 @@ export function meanEnergy({ positions, evaluated }: Bank, condition: Condition)
 export const bankLength = ({ s, design }: Bank): number => s.comparatorCount * Math.sqrt(comparatorArea(s, design) + trimArea(s, design))
 
 /** Clocked gates of one comparator [F]. */
-export const clockGatesOf = ({ s, design }: Bank): number => (design.widths.tail_m + 4 * design.widths.reset_m) * gatePerWidth(s.card, s.card.l_min_m)
+export const clockGatesOf = ({ s, design }: Bank): number => circuitOf(s, design, s.conditions[0], s.plan.converter.common_mode_v).clockGates
 
 function comparatorsLine(bank: Bank, condition: Condition): DraftLine {
   const energy = meanEnergy(bank, condition)

@@ -24,6 +24,22 @@ describe.each(benches)('the engine and the full circuit agree: $name', (bench) =
   })
 })
 
+describe('the engine and the full circuit agree where the nodes are of very different speed', () => {
+  const [plain] = benches
+
+  it.each([5e-14, 2e-13, 1e-12])('outputs loaded with %d F', (load) => {
+    const bench: Bench = { ...plain, load, linear: [1e-5, 1e-4] }
+    expectTogether([...compareDelays(same(bench)), ...compareOffsets(same(bench)), ...compareNodes(same(bench))])
+  })
+
+  it('100 fF on the drains of the input pair (regeneration and formula apart: the equilibrium comes late)', () => {
+    const bench: Bench = { ...plain, widths: { ...plain.widths, extra_cap_f: 1e-13 }, linear: [] }
+    const byTransient = compareDelays(same(bench)).filter(({ what }) => what.startsWith('delay'))
+    expect(byTransient).toHaveLength(4)
+    expectTogether([...byTransient, ...compareOffsets(same(bench)), ...compareNodes(same(bench))])
+  })
+})
+
 describe('the comparison can tell', () => {
   const [bench] = benches
   const stronger = (kind: 'n' | 'p', by: number): Sides => {

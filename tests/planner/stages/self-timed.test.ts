@@ -42,7 +42,9 @@ describe('tail of a self-timed search', () => {
 
   it('is the same when every cycle has the same latch, whichever way it is summed', () => {
     for (const shape of [shapeOf(6, 0), shapeOf(9, 2)]) {
-      for (const rate of [1e-3, 1e-12]) expect(conversionDelayByCycle(shape, same(shape), 1, rate) / conversionDelay(shape, latch, 1, rate)).toBeCloseTo(1, 7)
+      for (const rate of [1e-3, 1e-12]) {
+        expect(conversionDelayByCycle(shape, same(shape), 1, rate) / conversionDelay(shape, latch, 1, rate)).toBeCloseTo(1, 7)
+      }
     }
   })
 

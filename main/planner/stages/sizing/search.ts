@@ -65,7 +65,7 @@ export interface SearchOptions {
 export function searchDesign(
   s: Situation, spots: readonly Spot[], calibration: Calibration, from: LatchDesign, options: SearchOptions,
 ): { design: LatchDesign; settled: boolean } {
-  const space = unknownSpace(s.card, options.trim)
+  const space = unknownSpace(s, options.trim)
   const evaluate = (x: Float64Array): Trial => {
     const design = space.toDesign(x)
     const appraisals = spots.map((spot) => appraise(s, design, spot.condition, spot.demand, calibration.departure.get(spotName(spot)) ?? 0.1))
@@ -86,7 +86,7 @@ export function searchDesign(
 export function nearestDesign(
   s: Situation, spots: readonly Spot[], calibration: Calibration, from: LatchDesign, options: SearchOptions,
 ): LatchDesign {
-  const space: UnknownSpace = unknownSpace(s.card, options.trim)
+  const space: UnknownSpace = unknownSpace(s, options.trim)
   const n = space.lower.length
   let last: { x: Float64Array; values: number[] } | null = null
   const valuesAt = (x: Float64Array): number[] => {

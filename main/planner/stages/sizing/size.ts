@@ -37,9 +37,10 @@ export interface Sized {
 }
 
 /** Drawn dimensions have four digits, so that the printed ones give the same result when they are entered by hand. */
-function drawn(widths: Widths, lower: { w: number; l: number }): Widths {
+function drawn(s: Situation, widths: Widths): Widths {
   const round = (value: number) => Number(value.toPrecision(4))
-  const entries = widthUnknowns.map((key) => [key, Math.max(key === 'input_length_m' ? lower.l : lower.w, round(widths[key]))])
+  const least = (key: string) => (key === 'input_length_m' ? s.card.l_min_m : s.card.w_min_m)
+  const entries = widthUnknowns(s).map((key) => [key, Math.max(least(key), round(widths[key]!))])
   return { ...(Object.fromEntries(entries) as unknown as Widths), extra_cap_f: round(widths.extra_cap_f) }
 }
 
@@ -94,7 +95,7 @@ function refine(s: Situation, spots: readonly Spot[], from: Candidate, trim: fal
  * Null where there is none.
  */
 function looseEnd(s: Situation, { design, calibration, appraisals }: Candidate): LatchDesign | null {
-  const space = unknownSpace(s.card, design.trim === null ? false : design.trim.bits)
+  const space = unknownSpace(s, design.trim === null ? false : design.trim.bits)
   const at = space.fromDesign(design)
   const working = bindingSpots(appraisals, calibration.energySpot)
   const limit = worthwhile ** 3 * costOf(s, design, appraisals, calibration)
@@ -126,7 +127,7 @@ function finish(s: Situation, spots: readonly Spot[], start: Candidate, bits: nu
 
 /** Rounds to drawn dimensions and settles the trim; the candidate as it would be built. */
 function built(s: Situation, spots: readonly Spot[], candidate: Candidate): Built {
-  const widths = drawn(candidate.design.widths, { w: s.card.w_min_m, l: s.card.l_min_m })
+  const widths = drawn(s, candidate.design.widths)
   const { trim } = candidate.design
   const settled = trim === null ? { design: { widths, trim }, converged: true } : settleTrim(s, widths, trim.bits, spots, trim.unit)
   const { appraisals, calibration } = calibrate(s, settled.design, spots)

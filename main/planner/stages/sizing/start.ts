@@ -17,6 +17,7 @@ export function startDesign(s: Situation, demands: readonly Demand[], bits: numb
     widths: {
       input_m: width, input_length_m: card.l_min_m, cross_n_m: 0.5 * width, cross_p_m: 0.5 * width,
       tail_m: width, reset_m: Math.max(card.w_min_m, 0.25 * width), extra_cap_f: 0.2 * card.cap.wire_f,
+      ...(s.plan.comparator.topology === 'double_tail' ? { second_tail_m: 1.3 * width, second_input_m: 0.6 * width } : {}),
     },
     trim: bits === null ? null : { bits, unit: 2 * card.cap.trim_unit_f },
   }

@@ -1,9 +1,14 @@
 import type { Card } from '../../../contract/cards'
 import type { Widths } from '../../../contract/plan'
+import { widthsOf, type DrawnWidth } from '../../latch/topologies'
 import type { LatchDesign } from '../design'
+import type { Situation } from '../situation'
 
-/** The unknowns of sizing in logarithms; trim adds the unit and 2^bits. */
-export const widthUnknowns = ['input_m', 'input_length_m', 'cross_n_m', 'cross_p_m', 'tail_m', 'reset_m'] as const
+type WidthUnknown = DrawnWidth | 'input_length_m'
+
+/** Dimensions that sizing looks for: the widths of the topology and the length of the input pair. */
+export const widthUnknowns = ({ plan }: Situation): WidthUnknown[] =>
+  widthsOf(plan.comparator.topology).flatMap((key): WidthUnknown[] => (key === 'input_m' ? [key, 'input_length_m'] : [key]))
 
 const widest = 2e-3
 const longest = 50
@@ -25,26 +30,29 @@ export interface UnknownSpace {
  * Bounds and both directions of the change of variables.
  * @param trim false: no trim; a number: that many bits; 'free': bits are relaxed to a real number
  */
-export function unknownSpace(card: Card, trim: false | number | 'free'): UnknownSpace {
+export function unknownSpace(s: Situation, trim: false | number | 'free'): UnknownSpace {
+  const { card } = s
+  const keys = widthUnknowns(s)
+  const n = keys.length
   const floor = extraFloor(card)
-  const least = widthUnknowns.map((key) => (key === 'input_length_m' ? card.l_min_m : card.w_min_m))
-  const most = widthUnknowns.map((key) => (key === 'input_length_m' ? card.l_min_m * longest : widest))
+  const least = keys.map((key) => (key === 'input_length_m' ? card.l_min_m : card.w_min_m))
+  const most = keys.map((key) => (key === 'input_length_m' ? card.l_min_m * longest : widest))
   const trimLeast = trim === false ? [] : trim === 'free' ? [card.cap.trim_unit_f, 2] : [card.cap.trim_unit_f]
   const trimMost = trim === false ? [] : trim === 'free' ? [largestUnit, 2 ** mostBits] : [largestUnit]
   return {
     lower: Float64Array.from([...least, floor, ...trimLeast], Math.log),
     upper: Float64Array.from([...most, largestExtra, ...trimMost], Math.log),
     toDesign: (x) => {
-      const widths = Object.fromEntries(widthUnknowns.map((key, i) => [key, Math.exp(x[i])])) as unknown as Widths
-      const extra = Math.exp(x[6]) - floor
-      const bits = trim === 'free' ? x[8] / Math.LN2 : trim
+      const widths = Object.fromEntries(keys.map((key, i) => [key, Math.exp(x[i])])) as unknown as Widths
+      const extra = Math.exp(x[n]) - floor
+      const bits = trim === 'free' ? x[n + 2] / Math.LN2 : trim
       return {
         widths: { ...widths, extra_cap_f: extra > 1e-3 * floor ? extra : 0 },
-        trim: bits === false ? null : { bits, unit: Math.exp(x[7]) },
+        trim: bits === false ? null : { bits, unit: Math.exp(x[n + 1]) },
       }
     },
     fromDesign: ({ widths, trim: t }) => Float64Array.from([
-      ...widthUnknowns.map((key) => Math.log(widths[key])),
+      ...keys.map((key) => Math.log(widths[key]!)),
       Math.log(widths.extra_cap_f + floor),
       ...(trim === false ? [] : [Math.log(t?.unit ?? card.cap.trim_unit_f)]),
       ...(trim === 'free' ? [(t?.bits ?? 4) * Math.LN2] : []),

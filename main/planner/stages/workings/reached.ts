@@ -136,6 +136,6 @@ export function reachedWorkings(bank: Bank, entry: ComparatorEntry): Working[] {
     working('reached.input_cap_f', 'Input capacitance per side', 'W_in (c_ox L_in + 2 c_f)', numbers`${design.widths.input_m} * ${gatePerWidth(s.card, design.widths.input_length_m)}`, inputCap, 'F', 'linear gate capacitance of the card'),
     energyWorking(worstBy(points, (p) => p.energy!)),
     areaWorking(bank, entry),
-    ...handWorkings(bank, held((r) => r.delay), entry),
+    ...(s.plan.comparator.topology === 'strong_arm' ? handWorkings(bank, held((r) => r.delay), entry) : []),
   ]
 }
