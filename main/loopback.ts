@@ -16,6 +16,8 @@ import { securityHeaders } from './usecases/window-policy'
 
 /** How long an idle connection stays open: a page that comes back after a pause must not meet one that is just closing. */
 const idle_ms = 600_000
+/** More than any browser opens to one host. */
+const mostConnections = 64
 
 export interface LoopbackOptions {
   /** Port, 0…65535; 0 or absent: the usual one of this account, so that the page finds its recovery copy again, or else any free one. */
@@ -52,23 +54,26 @@ export async function startLoopback(options: LoopbackOptions = {}): Promise<Loop
   const api: Api = { answer: createAnswer({ compute, host: 'loopback' }), token: randomBytes(24).toString('base64url'), given }
   const fragment = `#token=${api.token}${given === null ? '' : `&open=${encodeURIComponent(given.name)}`}`
   const entry = `/enter/${randomBytes(24).toString('base64url')}`
-  const entries = new Set([entry])
+  const site: Site = { api, root, fragment, entries: new Set([entry]), entered: () => undefined }
   const server = createServer((request, response) => {
-    respond({ api, root, fragment, entries }, request, response).catch(() => {
+    respond(site, request, response).catch(() => {
       if (response.headersSent) response.destroy()
       else send(response, 500, fail('compute_failed', 'The host could not answer this request.'))
     })
   })
   server.keepAliveTimeout = idle_ms
+  server.maxConnections = mostConnections
   const port = options.port ? await listen(server, options.port) : await listen(server, usualPort()).catch(() => listen(server, 0))
-  const opened = options.open === true && openAppWindow(`http://127.0.0.1:${port}${entry}`)
+  const removeEntry = options.open === true ? openAppWindow(`http://127.0.0.1:${port}${entry}`) : null
+  site.entered = removeEntry ?? site.entered
   const close = async () => {
+    site.entered()
     const closed = new Promise<void>((resolve) => server.close(() => resolve()))
     await compute.close()
     server.closeAllConnections()
     await closed
   }
-  return { url: `http://127.0.0.1:${port}/${fragment}`, port, opened, close }
+  return { url: `http://127.0.0.1:${port}/${fragment}`, port, opened: removeEntry !== null, close }
 }
 
 async function givenPlan(path: string): Promise<PlanText> {
@@ -77,7 +82,7 @@ async function givenPlan(path: string): Promise<PlanText> {
   return read.value
 }
 
-interface Site { api: Api; root: string; fragment: string; entries: Set<string> }
+interface Site { readonly api: Api; readonly root: string; readonly fragment: string; readonly entries: Set<string>; entered: () => void }
 
 async function respond(site: Site, request: IncomingMessage, response: ServerResponse): Promise<void> {
   if (!hostAllowed(request.headers)) return send(response, 403, fail('refused', 'Use 127.0.0.1 or localhost to reach this host.'))
@@ -86,6 +91,7 @@ async function respond(site: Site, request: IncomingMessage, response: ServerRes
   if (request.method !== 'GET' && request.method !== 'HEAD') return send(response, 405, fail('refused', 'Only GET is answered here.'))
   // An entry works once: command lines of running programs can be read by others on a shared machine, the token must not be in one.
   if (site.entries.delete(pathname)) {
+    site.entered()
     response.writeHead(302, { ...securityHeaders, location: `/${site.fragment}`, 'cache-control': 'no-store' })
     response.end()
     return

@@ -70,11 +70,30 @@ export function suffixAt(rest: string, unit: string): Suffix | null {
 
 interface Decimal { readonly negative: boolean; readonly digits: string; readonly exponent: number }
 
-/** value = ± d.ddd · 10^exponent, rounded to so many digits; all that are needed without a count. */
+/** Digits beyond which a double is only the noise of its binary form. */
+const trusted = 15
+
+/**
+ * value = ± d.ddd · 10^exponent, rounded to so many digits; all that are needed without a count. Half a digit is rounded
+ * up from the decimal form, so that 937.5 µV is 938 µV whichever way it was computed.
+ */
 function decimalOf(value: number, digits?: number): Decimal {
-  const text = value.toExponential(digits === undefined ? undefined : Math.max(1, Math.min(digits, maximumDigits)) - 1)
-  const [mantissa, exponent] = text.split('e')
+  const wanted = digits === undefined ? undefined : Math.max(1, Math.min(digits, maximumDigits))
+  const plain = wanted === undefined || wanted >= trusted
+  const exact = plain ? value.toExponential(wanted === undefined ? undefined : wanted - 1) : halfUp(value.toExponential(trusted - 1), wanted)
+  const [mantissa, exponent] = exact.split('e')
   return { negative: value < 0, digits: mantissa.replace(/[-.]/g, ''), exponent: Number(exponent) }
+}
+
+/** A number in exponential form with fewer digits, half a digit rounded away from zero. */
+function halfUp(text: string, digits: number): string {
+  const [mantissa, exponent] = text.split('e')
+  const sign = mantissa.startsWith('-') ? '-' : ''
+  const all = mantissa.replace(/[-.]/g, '')
+  const kept = String(Number(all.slice(0, digits)) + (all[digits] >= '5' ? 1 : 0))
+  const carried = kept.length > digits
+  const shownDigits = carried ? kept.slice(0, digits) : kept
+  return `${sign}${shownDigits[0]}.${shownDigits.slice(1)}e${Number(exponent) + (carried ? 1 : 0)}`
 }
 
 /** Digits with the point after so many of them, filled with zeros on either side. */

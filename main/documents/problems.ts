@@ -3,11 +3,11 @@ import type { Problem, ProblemCode } from '../contract/errors'
 import { parseQuantity } from '../contract/expression'
 import { allowedAt, quantityAt } from './allowed'
 import { nearMiss } from './near-miss'
+import { dotted, mostProblems, shortKey } from './path-text'
 import { keysAt, planPaths, schemaAt, variants, type Path } from './plan-schema'
 
 type Issue = z.core.$ZodIssue
 const longestValue = 60
-const mostHints = 100
 
 /** A value as it is quoted in a message: JSON, cut short; never NaN or Infinity. */
 export function shortValue(value: unknown): string {
@@ -19,7 +19,7 @@ export function shortValue(value: unknown): string {
 
 function shortObject(value: object): string {
   if (Array.isArray(value)) return `a list of ${value.length}`
-  return `an object with ${Object.keys(value).slice(0, 5).join(', ') || 'no keys'}`
+  return `an object with ${Object.keys(value).slice(0, 5).map(shortKey).join(', ') || 'no keys'}`
 }
 
 export function valueAt(document: unknown, path: Path): unknown {
@@ -27,8 +27,6 @@ export function valueAt(document: unknown, path: Path): unknown {
     typeof value === 'object' && value !== null && Object.hasOwn(value, step) ? (value as Record<string | number, unknown>)[step] : undefined
   ), document)
 }
-
-const dotted = (path: Path): string => path.join('.')
 
 function unknownKeyHint(parent: Path, key: string): string {
   const known = keysAt(parent)
@@ -41,9 +39,9 @@ function unknownKeyHint(parent: Path, key: string): string {
 
 function unknownKeys(path: Path, keys: readonly string[], document: unknown): Problem[] {
   const allowed = keysAt(path).join(', ')
-  return keys.map((key, index) => ({
+  return keys.slice(0, mostProblems + 1).map((key) => ({
     code: 'unknown_key', path: dotted([...path, key]), value: shortValue(valueAt(document, [...path, key])), allowed,
-    hint: index < mostHints ? unknownKeyHint(path, key) : '',
+    hint: unknownKeyHint(path, key),
   }))
 }
 
@@ -101,9 +99,9 @@ function fromIssue(issue: Issue, document: unknown): Problem[] {
   return [{ code, path: dotted(path), value: shortValue(value), allowed: allowedAt(path, architecture), hint: hintOf(code, path, value) }]
 }
 
-/** What the schema has to say about a document, as problems a person can mend; one for each place and kind. */
+/** What the schema has to say about a document, as problems a person can mend: the first ones, one more than are told. */
 export function problemsFromIssues(issues: readonly Issue[], document: unknown): Problem[] {
-  return issues.flatMap((issue) => fromIssue(issue, document))
+  return issues.slice(0, mostProblems + 1).flatMap((issue) => fromIssue(issue, document)).slice(0, mostProblems + 1)
 }
 
 /** One problem for each place and kind, the first said. */

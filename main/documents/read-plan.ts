@@ -6,6 +6,7 @@ import { completePlan } from './complete-plan'
 import { crossCheck } from './cross-checks'
 import { decodeDocument } from './decode'
 import { migrate } from './migrations/migrate'
+import { dotted, mostProblems } from './path-text'
 import { problemsFromIssues, shortValue, withoutRepeats } from './problems'
 import { lineAndColumn, scanJson } from './scan-json'
 import { setPaths, type Setting } from './set-path'
@@ -23,8 +24,9 @@ const deepest = 64
 
 function refuse(problems: readonly Problem[]): Failure {
   const [first] = problems
-  const message = problems.length === 1 ? problemText(first) : `${problems.length} problems. First: ${problemText(first)}`
-  return fail('bad_document', message, problems)
+  if (problems.length === 1) return fail('bad_document', problemText(first), problems)
+  const many = problems.length > mostProblems ? `More than ${mostProblems} problems, of which these are told` : `${problems.length} problems`
+  return fail('bad_document', `${many}. First: ${problemText(first)}`, problems.slice(0, mostProblems))
 }
 
 function wholeDocument(code: Problem['code'], value: string, allowed: string, hint: string): Problem {
@@ -52,13 +54,19 @@ function anotherKind(document: Readonly<Record<string, unknown>>): Problem[] {
 
 const brokenText = /\p{Surrogate}/u
 
-/** Halves of characters cannot be written back, so they are refused where they stand. */
-function brokenTexts(value: unknown, path: readonly string[] = []): Problem[] {
+/** Halves of characters cannot be written back, so they are refused where they stand: the first ones, one more than are told. */
+function brokenTexts(value: unknown, path: readonly string[] = [], found: Problem[] = []): Problem[] {
   if (typeof value === 'string' && brokenText.test(value)) {
-    return [{ code: 'wrong_type', path: path.join('.'), value: 'text with half a character', allowed: 'whole characters', hint: 'Take out the lone \\ud800 … \\udfff escape.' }]
+    found.push({
+      code: 'wrong_type', path: dotted(path), value: 'text with half a character', allowed: 'whole characters', hint: 'Take out the lone \\ud800 … \\udfff escape.',
+    })
   }
-  if (typeof value !== 'object' || value === null) return []
-  return Object.entries(value).flatMap(([key, inner]) => brokenTexts(inner, [...path, key]))
+  if (typeof value !== 'object' || value === null) return found
+  for (const [key, inner] of Object.entries(value)) {
+    if (found.length > mostProblems) break
+    brokenTexts(inner, [...path, key], found)
+  }
+  return found
 }
 
 function cardOf(parsed: ParsedPlan): Card | null {

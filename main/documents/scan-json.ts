@@ -1,10 +1,12 @@
+import { mostProblems, shortKey } from './path-text'
+
 /** Where a JSON text stops being JSON, and what may stand there. */
 export interface Broken { readonly at: number; readonly allowed: string; readonly hint: string }
 
 export interface Scan {
   readonly broken: Broken | null
   readonly tooDeep: boolean
-  /** Dotted paths of keys that stand twice in one object; JSON.parse would hide all but the last. */
+  /** Dotted paths of keys that stand twice in one object, the first few; JSON.parse would hide all but the last. */
   readonly repeated: readonly string[]
 }
 
@@ -65,7 +67,7 @@ function string(scanner: Scanner): string | null {
   return null
 }
 
-const pathOf = (frame: Frame, step: string | number): string => (frame.path === '' ? String(step) : `${frame.path}.${step}`)
+const pathOf = (frame: Frame, step: string | number): string => (frame.path === '' ? shortKey(step) : `${frame.path}.${shortKey(step)}`)
 
 function open(scanner: Scanner, object: boolean): void {
   const parent = scanner.stack.at(-1)
@@ -94,7 +96,7 @@ function value(scanner: Scanner, sign: string): Broken | null {
 function key(scanner: Scanner, frame: Frame, sign: string): Broken | null {
   const name = sign === '"' ? string(scanner) : null
   if (name === null) return broken(scanner)
-  if (frame.keys?.has(name)) scanner.repeated.add(pathOf(frame, name))
+  if (frame.keys?.has(name) && scanner.repeated.size <= mostProblems) scanner.repeated.add(pathOf(frame, name))
   frame.keys?.add(name)
   frame.key = name
   scanner.wanted = 'colon'

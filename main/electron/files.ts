@@ -9,6 +9,9 @@ import type { Recent } from './recent'
 
 const planFilters = [{ name: 'Latchwright plan', extensions: ['json'] }, { name: 'All files', extensions: ['*'] }]
 
+/** Kinds of file that the program exports. */
+const exportEndings: readonly string[] = ['.pdf', '.svg', '.png', '.csv', '.tsv', '.json']
+
 export interface FileDesk {
   open(window: BrowserWindow, path: string | null): Promise<Reply<Replies['files.open']>>
   save(window: BrowserWindow, request: { text: string; path: string | null; suggested_name: string }): Promise<Reply<Replies['files.save']>>
@@ -43,7 +46,9 @@ export function createFileDesk(known: KnownPaths, recent: Recent): FileDesk {
   }
   const exportFile: FileDesk['export'] = async (window, { base64, suggested_name }) => {
     if (!/^[A-Za-z0-9+/]*={0,2}$/.test(base64)) return fail('bad_request', 'files.export: base64: this is not base64.')
-    const path = await askWhereToSave(window, plainName(suggested_name, ''))
+    const name = plainName(suggested_name, '.json')
+    if (!exportEndings.includes(extname(name).toLowerCase())) return fail('bad_request', `files.export: suggested_name: ends with one of ${exportEndings.join(' ')}.`)
+    const path = await askWhereToSave(window, name)
     if (path === null) return succeed(null)
     const written = await saveFile(path, Buffer.from(base64, 'base64'))
     return written.ok ? succeed({ name: basename(path) }) : written
@@ -63,8 +68,9 @@ async function askWhereToSave(window: BrowserWindow, name: string): Promise<stri
   return answer.canceled || answer.filePath === '' ? null : answer.filePath
 }
 
-/** A bare file name out of whatever the page suggests. */
+/** A bare file name out of whatever the page suggests; nothing in it may hide its ending. */
 function plainName(suggested: string, ending: string): string {
-  const name = basename(suggested.replaceAll('\\', '/')).replace(/[\u0000-\u001f<>:"|?*]/g, '').replace(/^\.+/, '').trim()
+  const bare = basename(suggested.replaceAll('\\', '/')).replace(/[\p{Cc}\p{Bidi_Control}<>:"|?*]/gu, '')
+  const name = bare.replace(/^\.+/, '').trim()
   return name === '' ? `plan${ending}` : name
 }

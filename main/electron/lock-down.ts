@@ -4,12 +4,13 @@ import { isWindowAddress } from './window-files'
 /** What a page may do beyond showing itself: put a copied table on the clipboard. */
 const permitted: readonly string[] = ['clipboard-sanitized-write']
 
-/** Refuses every permission and every address but the window's own, for all pages of the program. */
+/** Refuses every permission every download and every address but the window's own, for all pages of the program. */
 export function lockDownSession(): void {
   const own = session.defaultSession
   own.setPermissionRequestHandler((contents, permission, decide) => decide(permitted.includes(permission) && isWindowAddress(contents.getURL())))
   own.setPermissionCheckHandler((contents, permission) => permitted.includes(permission) && isWindowAddress(contents?.getURL() ?? ''))
   own.setDevicePermissionHandler(() => false)
+  own.on('will-download', (event) => event.preventDefault())
   own.webRequest.onBeforeRequest((details, decide) => decide({ cancel: !isAllowedAddress(details.url) }))
 }
 
@@ -21,6 +22,7 @@ export function lockDownPages(): void {
 }
 
 function lockDownPage(contents: WebContents): void {
+  contents.setWebRTCIPHandlingPolicy('disable_non_proxied_udp')
   contents.setWindowOpenHandler(() => ({ action: 'deny' }))
   contents.on('will-navigate', (event) => event.preventDefault())
   contents.on('will-redirect', (event) => event.preventDefault())

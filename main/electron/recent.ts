@@ -27,7 +27,7 @@ export function createRecent(folder: string): Recent {
   }
   const add = async (path: string) => {
     const paths = [path, ...(await list()).filter((other) => other !== path)].slice(0, most)
-    await writeFileAtomic(file, JSON.stringify({ paths }, null, 1))
+    await writeFileAtomic(file, JSON.stringify({ paths }, null, 1), { mode: 0o600 })
   }
   return {
     list: () => writing.then(list),

@@ -1,4 +1,4 @@
-import { mkdir, readdir, readFile, rename, rm, stat } from 'node:fs/promises'
+import { chmod, mkdir, readdir, readFile, rename, rm, stat } from 'node:fs/promises'
 import { join } from 'node:path'
 import writeFileAtomic from 'write-file-atomic'
 
@@ -28,7 +28,8 @@ export function createRecovery(folder: string, pid: number = process.pid, isAliv
   }
   const keep = async (window: number, text: string | null) => {
     if (text === null) return rm(own(window), { force: true })
-    await mkdir(home, { recursive: true })
+    await mkdir(home, { recursive: true, mode: 0o700 })
+    await chmod(home, 0o700).catch(() => undefined)
     await writeFileAtomic(own(window), text, { mode: 0o600 })
   }
   const read = async (window: number) => {

@@ -1,4 +1,5 @@
 import { problemText, type ErrorCode, type Failure, type Reply } from '../contract/errors'
+import { mostProblems } from '../documents/path-text'
 import type { Streams } from './streams'
 
 /** Exit codes of every command. */
@@ -9,12 +10,14 @@ const codes: Readonly<Partial<Record<ErrorCode, number>>> = {
   compute_failed: exit.cannotReadOrWrite,
 }
 
+const countOf = (told: number): string => (told === 1 ? '1 problem' : `${told} problems${told < mostProblems ? '' : ' or more'}`)
+
 /** Says what is wrong on the error stream, a problem a line under a line that counts them, and gives the exit code. */
 export function report({ error }: Failure, streams: Streams): number {
   const problems = error.problems ?? []
   if (problems.length === 0) streams.err(`latchwright: ${error.message}`)
   else {
-    streams.err(`latchwright: ${problems.length === 1 ? '1 problem' : `${problems.length} problems`} in the plan`)
+    streams.err(`latchwright: ${countOf(problems.length)} in the plan`)
     for (const problem of problems) streams.err(problemText(problem))
   }
   return codes[error.code] ?? exit.badInput

@@ -21,6 +21,12 @@ export function isBrokenPipe(error: unknown): boolean {
   return error instanceof Error && 'code' in error && (error.code === 'EPIPE' || error.code === 'ERR_STREAM_DESTROYED')
 }
 
+/** What a terminal would obey or reorder a line by: control characters but line breaks, and the marks of direction. */
+const unseen = /(?!\n)[\p{Cc}\p{Bidi_Control}\u2028\u2029]/gu
+
+/** Text that only says something: what a document brings along cannot steer the terminal it is shown on. */
+export const harmless = (text: string): string => text.replace(unseen, (sign) => `\\u${sign.charCodeAt(0).toString(16).padStart(4, '0')}`)
+
 export function processStreams(): Streams {
   for (const stream of [process.stdout, process.stderr]) {
     stream.on('error', (error) => {
@@ -30,6 +36,6 @@ export function processStreams(): Streams {
   return {
     readInput: () => readDocumentStream(process.stdin as AsyncIterable<Uint8Array>),
     out: (text) => write(process.stdout, text),
-    err: (text) => { process.stderr.write(`${text}\n`) },
+    err: (text) => { process.stderr.write(`${harmless(text)}\n`) },
   }
 }

@@ -37,7 +37,7 @@ export function send(response: ServerResponse, status: number, reply: Reply<unkn
   const body = Buffer.from(JSON.stringify(reply))
   response.writeHead(status, {
     ...securityHeaders, 'content-type': 'application/json; charset=utf-8', 'content-length': body.length, 'cache-control': 'no-store',
-    ...(status === 413 ? { connection: 'close' } : {}),
+    ...(status >= 400 && status < 500 ? { connection: 'close' } : {}),
   })
   response.end(body)
 }

@@ -1,6 +1,8 @@
 import { spawn } from 'node:child_process'
-import { accessSync, constants } from 'node:fs'
+import { accessSync, constants, mkdtempSync, rm } from 'node:fs'
+import { tmpdir } from 'node:os'
 import { delimiter, join } from 'node:path'
+import { writeEntryPage } from './entry-page'
 
 const linuxNames = ['chromium', 'chromium-browser', 'google-chrome', 'google-chrome-stable', 'microsoft-edge', 'brave-browser']
 const macNames = ['Google Chrome', 'Chromium', 'Microsoft Edge', 'Brave Browser']
@@ -40,14 +42,19 @@ function isExecutable(path: string): boolean {
 /**
  * Opens the address as a window of its own in an installed Chromium or Chrome. It outlives nothing and blocks nothing.
  *
- * @returns whether a browser was started
+ * @param url  led to from a file, so that it stands in no command line
+ * @returns    what takes that file away once it was used; null when no browser was started
  */
-export function openAppWindow(url: string, around: Surroundings = process): boolean {
+export function openAppWindow(url: string, around: Surroundings = process): (() => void) | null {
   const browser = hasDisplay(around) ? findBrowser(around) : null
-  if (browser === null) return false
-  const asRoot = around.platform === 'linux' && process.getuid?.() === 0 ? ['--no-sandbox', '--test-type'] : []
-  const child = spawn(browser, [`--app=${url}`, '--window-size=1440,900', '--no-first-run', '--no-default-browser-check', ...asRoot], { stdio: 'ignore', detached: true })
-  child.once('error', () => undefined)
+  if (browser === null) return null
+  const page = writeEntryPage(url, browser)
+  const profile = around.platform === 'linux' && process.getuid?.() === 0 ? mkdtempSync(join(tmpdir(), 'latchwright-profile-')) : null
+  const asRoot = profile === null ? [] : ['--no-sandbox', '--test-type', `--user-data-dir=${profile}`]
+  const child = spawn(browser, [`--app=${page.address}`, '--window-size=1440,900', '--no-first-run', '--no-default-browser-check', ...asRoot], { stdio: 'ignore', detached: true })
+  const gone = () => { if (profile !== null) rm(profile, { recursive: true, force: true }, () => undefined) }
+  child.once('error', gone)
+  child.once('exit', gone)
   child.unref()
-  return true
+  return page.remove
 }

@@ -10,7 +10,7 @@ export interface Scale {
 
 /** The unit in which the largest value of a column has one to three digits before its point; areas up to four. */
 export function scaleOf(values: readonly (number | null)[], unit: string): Scale {
-  const largest = Math.max(0, ...values.map((value) => Math.abs(value ?? 0)))
+  const largest = values.reduce((most: number, value) => Math.max(most, Math.abs(value ?? 0)), 0)
   if (largest === 0) return { unit, name: unit, factor: 1 }
   if (unit === 'm²' && largest < 1e-8) return { unit, name: 'µm²', factor: 1e12 }
   const [number, name = unit] = formatSi(largest, unit).split(' ')

@@ -35,9 +35,13 @@ export function useOf(use: number | null): string {
   return use >= 10 ? plain(use, 3) : use.toFixed(2).replace('-', '−')
 }
 
+/** The least and the largest of a bank's values, however many there are. */
+export const spread = (values: readonly number[]): [number, number] =>
+  [values.reduce((least, value) => Math.min(least, value), Infinity), values.reduce((most, value) => Math.max(most, value), -Infinity)]
+
 /** `4.21 mV` or, where it differs, `4.02 … 4.21 mV`. */
 export function spanOf(values: readonly number[], unit: string, digits = 3): string {
-  const [low, high] = [Math.min(...values), Math.max(...values)]
+  const [low, high] = spread(values)
   const [first, last] = [formatSi(low, unit, digits), formatSi(high, unit, digits)]
   if (first === last) return first
   const [number, name] = first.split(' ')

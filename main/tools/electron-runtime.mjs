@@ -20,6 +20,8 @@ export function electronPath(root) {
   }
 }
 
+const signals = ['SIGINT', 'SIGTERM']
+
 /**
  * Fetches Electron's runtime in a child process and watches it: when nothing arrives for a while, it is given up.
  *
@@ -34,9 +36,16 @@ export async function fetchElectron(root, { quiet_ms = 20_000, script = join(roo
     env: { ...process.env, TMPDIR: work, TMP: work, TEMP: work }, stdio: 'ignore', detached: process.platform !== 'win32',
   })
   const end = () => endGroup(child)
+  const interrupted = (signal) => {
+    end()
+    rmSync(work, { recursive: true, force: true })
+    process.kill(process.pid, signal)
+  }
   process.once('exit', end)
+  for (const signal of signals) process.once(signal, interrupted)
   await watch(child, [work, join(root, 'node_modules', 'electron', 'dist')], quiet_ms)
   process.off('exit', end)
+  for (const signal of signals) process.off(signal, interrupted)
   rmSync(work, { recursive: true, force: true })
   return electronPath(root)
 }

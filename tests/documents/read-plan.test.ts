@@ -90,8 +90,7 @@ describe('what is refused, all of it at once', () => {
     })
     const said = problems.map((problem) => `${problem.code} ${problem.path}`).sort()
     expect(said).toEqual([
-      'missing comparator.widths', 'not_a_choice converter.inl_method', 'not_available_yet comparator.topology',
-      'not_available_yet converter.flash.input_style',
+      'missing comparator.widths', 'not_a_choice converter.inl_method', 'not_available_yet converter.flash.input_style',
       'out_of_range converter.resolution_bits', 'out_of_range converter.yield', 'unknown_card process.card', 'unknown_key converter.sample_rate',
       'unknown_key tittle', 'wrong_type converter.sample_rate_hz',
     ])
@@ -197,10 +196,21 @@ describe('bytes and text', () => {
     expect(problemsOf('x'.repeat(5_000_001))).toEqual([expect.objectContaining({ code: 'too_large' })])
   })
 
+  test('a key of a megabyte is not told again with every problem under it', () => {
+    const repeated = Array.from({ length: 1500 }, (_, i) => `"k${i}":0,"k${i}":"\\ud800"`).join(',')
+    const long = 'x'.repeat(1_000_000)
+    const refused = readPlan(`{"${long}":{${repeated}}}`)
+    expect(JSON.stringify(refused).length).toBeLessThan(100_000)
+    expect(problemsOf(`{"${long}":{"a":1,"a":2}}`)).toContainEqual(expect.objectContaining({ code: 'repeated_key', path: `${'x'.repeat(59)}….a` }))
+  })
+
   test('megabytes of trouble end in seconds', () => {
     const started = performance.now()
     const keys = Array.from({ length: 100_000 }, (_, i) => `"k${i}":0`).join(',')
-    expect(problemsOf(`{${keys}}`).length).toBeGreaterThan(100_000)
+    const many = readPlan(`{${keys}}`)
+    expect(JSON.stringify(many).length).toBeLessThan(100_000)
+    expect(many).toMatchObject({ ok: false, error: { message: expect.stringMatching(/^More than 100 problems/) as string } })
+    expect(problemsOf(`{${keys}}`)).toHaveLength(100)
     expect(problemsOf(`{"title": "${'\\n'.repeat(2_000_000)}"}`)).toContainEqual(expect.objectContaining({ path: 'title' }))
     expect(performance.now() - started).toBeLessThan(60_000)
   })

@@ -1,8 +1,9 @@
-import { mkdtemp, readFile, rm, writeFile } from 'node:fs/promises'
+import { link, mkdtemp, readFile, rm, symlink, writeFile } from 'node:fs/promises'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { afterAll, beforeAll, describe, expect, test } from 'vitest'
 import { faceNames } from '../../main/headless/names'
+import { harmless } from '../../main/headless/streams'
 import { smallest } from '../documents/samples'
 import { run } from './in-process'
 
@@ -39,6 +40,17 @@ describe('plan', () => {
     const before = await readFile(file, 'utf8')
     expect(await run(['plan', file, '--out', join(folder, '.', 'a.bank.json')])).toMatchObject({ code: 2, out: '', err: expect.stringContaining('--out') as string })
     expect(await readFile(file, 'utf8')).toBe(before)
+  })
+
+  test('nor through a link to it', async () => {
+    const links = [join(folder, 'hard.json'), join(folder, 'soft.json')]
+    await link(file, links[0])
+    await symlink(file, links[1])
+    for (const out of links) expect(await run(['plan', file, '--out', out])).toMatchObject({ code: 2, out: '', err: expect.stringContaining('--out') as string })
+  })
+
+  test('what a document brings along cannot steer a terminal', () => {
+    expect(harmless('a\u001b[31m\u009b\u202e\u2066\r\u007f“µ”\nb')).toBe('a\\u001b[31m\\u009b\\u202e\\u2066\\u000d\\u007f“µ”\nb')
   })
 
   test('a stop finding ends with 1, after the result', async () => {

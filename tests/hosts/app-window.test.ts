@@ -1,6 +1,8 @@
-import { chmod, mkdtemp, readFile, writeFile } from 'node:fs/promises'
+import { existsSync } from 'node:fs'
+import { chmod, mkdtemp, readFile, stat, writeFile } from 'node:fs/promises'
 import { tmpdir } from 'node:os'
-import { join } from 'node:path'
+import { dirname, join } from 'node:path'
+import { fileURLToPath } from 'node:url'
 import { expect, test, vi } from 'vitest'
 import { findBrowser, hasDisplay, openAppWindow } from '../../main/loopback/app-window'
 import { loopback } from './hosts'
@@ -22,7 +24,7 @@ test('a browser is looked for on the path, one that can be started', async () =>
   await chmod(join(folder, 'google-chrome'), 0o755)
   await writeFile(join(folder, 'chromium-browser'), '')
   expect(findBrowser({ platform: 'linux', env })).toBe(join(folder, 'google-chrome'))
-  expect(openAppWindow('http://127.0.0.1:1/', { platform: 'linux', env })).toBe(false)
+  expect(openAppWindow('http://127.0.0.1:1/', { platform: 'linux', env })).toBeNull()
 })
 
 test('the browser gets an entry that works once, never the token', async () => {
@@ -39,10 +41,14 @@ test('the browser gets an entry that works once, never the token', async () => {
       return text
     })
     expect(asked).not.toContain(host.token)
-    const entry = /--app=(\S+)/.exec(asked)?.[1] ?? ''
+    expect(asked).not.toContain('/enter/')
+    const page = fileURLToPath(/--app=(\S+)/.exec(asked)?.[1] ?? '')
+    expect([(await stat(page)).mode & 0o777, (await stat(dirname(page))).mode & 0o777]).toEqual([0o600, 0o700])
+    const entry = /url=([^"]+)/.exec(await readFile(page, 'utf8'))?.[1] ?? ''
     const answer = await fetch(entry, { redirect: 'manual' })
     expect([answer.status, answer.headers.get('location')]).toEqual([302, `/#token=${host.token}`])
     expect((await fetch(entry, { redirect: 'manual' })).status).toBe(404)
+    expect(existsSync(dirname(page))).toBe(false)
   } finally {
     process.env.PATH = kept.PATH
     if (kept.DISPLAY === undefined) delete process.env.DISPLAY

@@ -1,4 +1,4 @@
-import { mkdir, mkdtemp, readFile, readdir, writeFile } from 'node:fs/promises'
+import { mkdir, mkdtemp, readFile, readdir, stat, writeFile } from 'node:fs/promises'
 import { join } from 'node:path'
 import { tmpdir } from 'node:os'
 import { beforeEach, describe, expect, test } from 'vitest'
@@ -124,6 +124,10 @@ describe('saving', () => {
     const bytes = Buffer.from([0x25, 0x50, 0x44, 0x46, 0, 255])
     expect(await ask('files.export', { base64: bytes.toString('base64'), suggested_name: 'sheet.pdf' })).toEqual({ ok: true, value: { name: 'sheet.pdf' } })
     expect(await readFile(path)).toEqual(bytes)
+    expect(await ask('files.export', { base64: 'AAAA', suggested_name: 'fdp.desktop' })).toMatchObject(failed('bad_request'))
+    expect(await ask('files.export', { base64: 'AAAA', suggested_name: 'a\u202etxt.pdf' })).toMatchObject({ ok: true })
+    expect(program.seen.saveOptions.at(-1)?.defaultPath).toMatch(/\/atxt\.pdf$/)
+    await writeFile(path, bytes)
     expect(await ask('files.export', { base64: 'not base64!', suggested_name: 'x' })).toMatchObject(failed('bad_request'))
     expect(await ask('files.save', { text: 'x', path, suggested_name: 'x' })).toMatchObject(failed('refused'))
   })
@@ -134,6 +138,7 @@ describe('recent files', () => {
     const recent = createRecent(folder)
     await Promise.all(Array.from({ length: 12 }, (_, index) => recent.add(`/p/${index}`)))
     await recent.add('/p/5')
+    expect((await stat(join(folder, 'recent.json'))).mode & 0o777).toBe(0o600)
     const paths = await createRecent(folder).list()
     expect(paths).toEqual(['/p/5', '/p/11', '/p/10', '/p/9', '/p/8', '/p/7', '/p/6', '/p/4', '/p/3', '/p/2'])
   })
@@ -165,5 +170,6 @@ describe('recovery', () => {
     await recovery.keep(1, null)
     expect(await recovery.read(1)).toBeNull()
     expect(await readdir(join(folder, 'recovery'))).toEqual([])
+    expect((await stat(join(folder, 'recovery'))).mode & 0o777).toBe(0o700)
   })
 })

@@ -47,6 +47,10 @@ describe('a window', () => {
   test('goes nowhere else', () => {
     const { webContents } = first()
     expect(webContents.windowOpen?.()).toEqual({ action: 'deny' })
+    expect(webContents.webrtc).toBe('disable_non_proxied_udp')
+    const download = { prevented: false, preventDefault: () => { download.prevented = true } }
+    program.seen.download?.(download)
+    expect(download.prevented).toBe(true)
     for (const event of ['will-navigate', 'will-redirect', 'will-frame-navigate', 'will-attach-webview']) {
       expect([event, prevented(webContents, event)]).toEqual([event, true])
     }

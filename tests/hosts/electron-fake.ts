@@ -16,6 +16,7 @@ export const seen = {
   permissionRequest: undefined as undefined | ((contents: unknown, permission: string, decide: (allow: boolean) => void) => void),
   permissionCheck: undefined as undefined | ((contents: unknown, permission: string) => boolean),
   devicePermission: undefined as undefined | (() => boolean),
+  download: undefined as undefined | ((event: { preventDefault: () => void }) => void),
   beforeRequest: undefined as undefined | ((details: { url: string }, decide: (answer: { cancel: boolean }) => void) => void),
   menu: [] as MenuItem[],
   openAnswer: { canceled: true, filePaths: [] as string[] },
@@ -35,9 +36,11 @@ export interface MenuItem { label?: string; role?: string; submenu?: MenuItem[];
 export class FakeContents extends EventEmitter {
   windowOpen: (() => { action: string }) | undefined
   keys: object[] = []
+  webrtc = ''
   mainFrame = { url: 'latchwright://window/index.html' }
   constructor(readonly id: number) { super() }
   setWindowOpenHandler(handler: () => { action: string }) { this.windowOpen = handler }
+  setWebRTCIPHandlingPolicy(policy: string) { this.webrtc = policy }
   sendInputEvent(event: object) { this.keys.push(event) }
   getURL() { return this.mainFrame.url }
 }
@@ -99,6 +102,7 @@ export const session = {
     setPermissionRequestHandler: (handler: typeof seen.permissionRequest) => { seen.permissionRequest = handler },
     setPermissionCheckHandler: (handler: typeof seen.permissionCheck) => { seen.permissionCheck = handler },
     setDevicePermissionHandler: (handler: typeof seen.devicePermission) => { seen.devicePermission = handler },
+    on: (_name: 'will-download', listener: typeof seen.download) => { seen.download = listener },
     webRequest: { onBeforeRequest: (handler: typeof seen.beforeRequest) => { seen.beforeRequest = handler } },
   },
 }

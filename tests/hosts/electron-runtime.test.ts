@@ -1,8 +1,10 @@
+import { spawn } from 'node:child_process'
+import { once } from 'node:events'
 import { existsSync, readFileSync } from 'node:fs'
 import { mkdir, mkdtemp, writeFile } from 'node:fs/promises'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
-import { beforeEach, expect, test } from 'vitest'
+import { beforeEach, expect, test, vi } from 'vitest'
 import { electronPath, fetchElectron } from '../../main/tools/electron-runtime.mjs'
 
 let root: string
@@ -54,6 +56,25 @@ test('a fetch in silence is given up, and ended with all it started', async () =
   await new Promise((resolve) => setTimeout(resolve, 500))
   expect(before).toBeGreaterThan(0)
   expect(beats()).toBe(before)
+})
+
+test('an interruption ends the fetch and all it started, and leaves nothing behind', async () => {
+  const path = await script(`
+    fs.writeFileSync(home + '/tmp', os.tmpdir())
+    setInterval(() => fs.appendFileSync(home + '/beats', '.'), 50)`)
+  const runtime = JSON.stringify(new URL('../../main/tools/electron-runtime.mjs', import.meta.url).href)
+  const fetching = `import(${runtime}).then(({ fetchElectron }) => fetchElectron(${JSON.stringify(root)}, { script: ${JSON.stringify(path)} }))`
+  const program = spawn(process.execPath, ['-e', fetching], { stdio: 'ignore' })
+  const ended = once(program, 'exit')
+  const beats = () => readFileSync(join(home, 'beats'), 'utf8').length
+  await vi.waitFor(() => expect(beats()).toBeGreaterThan(0), 10_000)
+  program.kill('SIGTERM')
+  expect((await ended)[1]).toBe('SIGTERM')
+  await new Promise((resolve) => setTimeout(resolve, 100))
+  const before = beats()
+  await new Promise((resolve) => setTimeout(resolve, 300))
+  expect(beats()).toBe(before)
+  expect(existsSync(readFileSync(join(home, 'tmp'), 'utf8'))).toBe(false)
 })
 
 test('a fetch that fails is null at once, and leaves nothing behind', async () => {

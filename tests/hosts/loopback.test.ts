@@ -98,8 +98,8 @@ describe('what is taken', () => {
 
 describe('what is served', () => {
   test('the window, with strict headers', async () => {
-    const { status, headers, body } = await send('/')
-    expect(status).toBe(200)
+    const { status, headers, body } = await send('/', { headers: { connection: 'keep-alive' } })
+    expect([status, headers.connection]).toEqual([200, 'keep-alive'])
     expect(body).toContain('<title>Latchwright')
     expect(headers['content-type']).toBe('text/html; charset=utf-8')
     expect(headers['cache-control']).toBe('no-store')
@@ -125,8 +125,8 @@ describe('what is served', () => {
     '/../secret.txt', '/assets/../../secret.txt', '/%2e%2e/secret.txt', '/..%2fsecret.txt', '/..%5csecret.txt', '/..\\secret.txt', '//secret.txt',
     '/assets/..%2f..%2fsecret.txt', '/%00', '/index.html%00.js', '/%', '/.hidden', '/assets', '/C:/secret.txt', '/etc/passwd', '/enter/guess', '/enter/',
   ])('nothing at %s', async (path) => {
-    const { status, body } = await send(path)
-    expect(status).toBe(404)
+    const { status, body, headers } = await send(path, { headers: { connection: 'keep-alive' } })
+    expect([status, headers.connection]).toEqual([404, 'close'])
     expect(body).not.toContain('not for the window')
   })
   test('nothing through a link that leads out', async () => {

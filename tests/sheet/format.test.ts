@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { columnsFit, columnWidths, inScale, pairInScale, scaleOf } from '../../main/sheet/columns'
 import { fold, rangeOf } from '../../main/sheet/fold'
-import { ofLimit, plain, spanOf, useOf } from '../../main/sheet/format'
+import { ofLimit, plain, spanOf, spread, useOf } from '../../main/sheet/format'
 
 describe('numbers of the sheet', () => {
   it('says what is reached in the unit of the limit', () => {
@@ -9,6 +9,13 @@ describe('numbers of the sheet', () => {
     expect(ofLimit(0.86e-3, 0.82e-3, 'V')).toBe('860 of 820 µV')
     expect(ofLimit(4.9e-4, 2.34e-3, 'V')).toBe('0.490 of 2.34 mV')
     expect(ofLimit(0, 2.34e-3, 'V')).toBe('0 of 2.34 mV')
+  })
+
+  it('takes banks of any size', () => {
+    const values = Array.from({ length: 300_000 }, (_, i) => ((i * 7919) % 300_000) * 1e-6)
+    expect(spread(values)).toEqual([0, 299_999 * 1e-6])
+    expect(spanOf(values, 'V')).toBe('0 V … 300 mV')
+    expect(scaleOf(values, 'V').name).toBe('mV')
   })
 
   it('falls back to a unit of its own where the two are far apart', () => {

@@ -80,6 +80,14 @@ export function singleDelay(circuit: Circuit, analysis: LatchAnalysis, swing: nu
   return full > linear ? { delay: full, transient: true } : { delay: linear, transient: false }
 }
 
+/** t_0 + τ·ln(V_DD/2av) [s]; undefined in a self-timed search, whose delay is cheap as it stands. */
+export function linearDelay(
+  s: Situation, design: LatchDesign, { supply }: Condition, { analysis }: LatchFigures, overdrive: number | null,
+): number | undefined {
+  if (overdrive === null) return undefined
+  return decisionDelay(analysis.integration, analysis.tau, supply, attenuationOf(s, designInputCap(s, design)) * overdrive)
+}
+
 /** Time of one decision, or of all decisions of a self-timed conversion with this latch in every cycle [s]. */
 function delayOf(s: Situation, { analysis, circuit }: LatchFigures, swing: number, overdrive: number | null): number {
   if (overdrive !== null) return singleDelay(circuit, analysis, swing, overdrive).delay
@@ -90,17 +98,17 @@ function delayOf(s: Situation, { analysis, circuit }: LatchFigures, swing: numbe
 /**
  * Everything reached at a condition, referred to the converter's input.
  * @param overdrive what must be resolved there [V]; null in a self-timed search, whose delay is that of all decisions
- * @param conversion that delay where it is known for latches that differ from cycle to cycle [s]
+ * @param known the delay where it is known otherwise: latches that differ from cycle to cycle, or a neighbour's word [s]
  */
 export function attained(
-  s: Situation, design: LatchDesign, condition: Condition, figures: LatchFigures, overdrive: number | null, conversion?: number,
+  s: Situation, design: LatchDesign, condition: Condition, figures: LatchFigures, overdrive: number | null, known?: number,
 ): Attained {
   const inputCap = designInputCap(s, design)
   const a = attenuationOf(s, inputCap)
   const raw = trimStepOf(design, figures)
   const step = raw === null ? null : raw / a
   return {
-    delay: conversion ?? delayOf(s, figures, condition.supply / a, overdrive),
+    delay: known ?? delayOf(s, figures, condition.supply / a, overdrive),
     noise: noiseOf(s, figures.analysis, condition.temperature) / a,
     offset: figures.offset / a,
     residual: residualOf(s, figures.offset / a, step),

@@ -1,6 +1,7 @@
 import { scaleLinear } from 'd3-scale'
 import { curveStepAfter, line as lineShape } from 'd3-shape'
 import { formatSi } from '../../contract/units'
+import { spread } from '../format'
 import { ink } from '../theme'
 import { label, line, path, type Picture } from './svg'
 
@@ -45,7 +46,7 @@ export function stripPicture(strip: Strip, width: number, height: number): Pictu
 
 /** From zero, or closer where all values lie close together; then the axis says so by its numbers. */
 function domainOf(values: readonly number[]): [number, number] {
-  const [low, high] = [Math.min(...values), Math.max(...values)]
+  const [low, high] = spread(values)
   if (low > 0.8 * high) return [low - Math.max(0.4 * (high - low), 0.04 * high), high + Math.max(0.2 * (high - low), 0.02 * high)]
   return [Math.min(0, low), Math.max(0, high) || 1]
 }

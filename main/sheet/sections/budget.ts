@@ -15,7 +15,7 @@ export function budget({ result, width }: SheetContext): Content {
   const asked = formatSi(plan.converter.enob_bits, 'bit')
   const picture: Content = {
     stack: [
-      heading('Error budget', width, `Allowed error power ${formatSi(allowed, 'V²')}, for ${asked} effective. Filled: used. Outline: allowed.`),
+      heading('Error budget', width, `Allowed error power ${formatSi(allowed, 'V²')}, for ${asked} effective. Filled: used, ${powerCorner(result)}. Outline: allowed.`),
       { svg: svgOf(budgetPicture(result.budget, allowed, width)), margin: [0, 2, 0, 8] },
     ],
     unbreakable: true,
@@ -30,6 +30,12 @@ export function budget({ result, width }: SheetContext): Content {
     unbreakable: true,
   }
   return [picture, figures]
+}
+
+/** The corner that used power and predicted figures belong to. */
+function powerCorner({ corners, ledger }: SheetContext['result']): string {
+  const corner = corners.find((one) => one.power_w === ledger.power_w)
+  return corner === undefined || corners.length === 1 ? `at ${corners[0].name}` : `at ${corner.name}, the corner of the largest power`
 }
 
 function table(result: SheetContext['result'], allowed: number): Content {

@@ -2,7 +2,7 @@ import type { Content, TableCell } from 'pdfmake/interfaces'
 import type { ComparatorEntry } from '../../contract/result'
 import { formatSi } from '../../contract/units'
 import type { SheetContext } from '../context'
-import { dash, spanOf, useOf } from '../format'
+import { dash, spanOf, spread, useOf } from '../format'
 import { absent, handedOn, measures, notReached, useMeasures, type Measure } from '../measures'
 import { ink, ruled } from '../theme'
 import { aside, columnHead, figure, heading, right, subheading, symbol } from '../words'
@@ -37,8 +37,10 @@ function facts({ quantities }: SheetContext['result']): [string, string][] {
 function row(measure: Measure, comparators: readonly ComparatorEntry[]): TableCell[] {
   const limit = measure.limit === null ? '' : shown(comparators.map((entry) => (measure.limit === null ? null : entry.limits[measure.limit])), measure.unit)
   const reached = measure.reached === null ? '' : shown(comparators.map((entry) => (measure.reached === null ? null : entry.reached[measure.reached])), measure.unit)
+  const trimmed = measure.limit === 'offset_v' && comparators.some((entry) => entry.limits.trim_step_v !== null)
+  const asks = trimmed ? 'Spread if it were not trimmed; a trimmed bank is held to its trim step.' : measure.asks
   const missing = measure.limit !== null && limit === dash ? absent[measure.limit] : undefined
-  return [measure.label, symbol(measure.symbol), right(limit), right(missing ? '' : reached), right(useSpan(measure, comparators)), aside(missing ?? measure.asks, { margin: [4, 1.4, 0, 0] })]
+  return [measure.label, symbol(measure.symbol), right(limit), right(missing ? '' : reached), right(useSpan(measure, comparators)), aside(missing ?? asks, { margin: [4, 1.4, 0, 0] })]
 }
 
 /** The use of a limit over the bank, where it counts as one of the six. */
@@ -47,7 +49,7 @@ function useSpan(measure: Measure, comparators: readonly ComparatorEntry[]): str
   if (!one) return ''
   const uses = comparators.map((entry) => entry.use[one.use]).filter((use) => use !== null)
   if (uses.length === 0) return dash
-  const [low, high] = [useOf(Math.min(...uses)), useOf(Math.max(...uses))]
+  const [low, high] = spread(uses).map(useOf)
   return low === high ? low : `${low} … ${high}`
 }
 

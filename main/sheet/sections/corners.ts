@@ -6,7 +6,7 @@ import { columnHead, heading, right } from '../words'
 
 /** What the same design does at each corner that was evaluated. */
 export function corners({ result, width }: SheetContext): Content {
-  const heads = [columnHead('Corner'), ...['Delay', 'Noise', 'Offset', 'Power'].map((text) => columnHead(text, 'right')), columnHead('Meets its limits', 'right')]
+  const heads = [columnHead('Corner'), ...['Delay', 'Noise', 'Raw offset', 'Power'].map((text) => columnHead(text, 'right')), columnHead('Meets its limits', 'right')]
   const body = result.corners.map((corner): TableCell[] => [
     corner.name,
     right(formatSi(corner.delay_s, 's')), right(formatSi(corner.noise_v, 'V')), right(formatSi(corner.offset_v, 'V')), right(formatSi(corner.power_w, 'W')),

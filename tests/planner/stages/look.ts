@@ -3,7 +3,7 @@ import { bankOf } from '../../../main/planner/bank-of'
 import type { Bank } from '../../../main/planner/stages/bank'
 import type { LatchDesign } from '../../../main/planner/stages/design'
 import { circuitOf } from '../../../main/planner/stages/latch-figures'
-import { appraise, type Appraisal } from '../../../main/planner/stages/sizing/appraise'
+import { appraise, usualNeighbour, type Appraisal } from '../../../main/planner/stages/sizing/appraise'
 import { comparatorArea, integratedEnergy, roughEnergy, trimArea } from '../../../main/planner/stages/sizing/cost'
 import type { Spot } from '../../../main/planner/stages/sizing/search'
 import { settleTrim } from '../../../main/planner/stages/sizing/settle-trim'
@@ -111,7 +111,7 @@ export function searchAtRandom(bench: Bench, wanted: number, seed: number): { dr
     const bare: LatchDesign = { widths, trim: bits === null ? null : { bits, unit: s.card.cap.trim_unit_f } }
     if (rough(bare) > promising * rough(design)) continue
     looked++
-    if (spots.some(({ condition, demand }) => fallsShort(appraise(s, bare, condition, demand, 0.1), bits !== null))) continue
+    if (spots.some(({ condition, demand }) => fallsShort(appraise(s, bare, condition, demand, usualNeighbour), bits !== null))) continue
     const judged = judge(bench, widths, bits)
     if (judged !== null && judged.cost < (best?.cost ?? Infinity)) best = judged
   }

@@ -3,7 +3,8 @@ import type { Condition } from '../../latch/condition'
 import type { LatchDesign } from '../design'
 import type { Demand } from '../positions'
 import type { Situation } from '../situation'
-import { appraise, type Appraisal } from './appraise'
+import { linearDelay } from '../uses'
+import { appraise, usualNeighbour, type Appraisal, type Neighbour } from './appraise'
 import { comparatorArea, integratedEnergy, roughEnergy, trimArea } from './cost'
 import { unknownSpace, type UnknownSpace } from './unknowns'
 
@@ -12,8 +13,7 @@ export interface Spot { readonly condition: Condition; readonly demand: Demand }
 
 /** What the search takes from a fully integrated neighbour. */
 export interface Calibration {
-  /** δ/τ per spot name. */
-  readonly departure: ReadonlyMap<string, number>
+  readonly neighbours: ReadonlyMap<string, Neighbour>
   /** Integrated over closed-form energy, and where the energy is largest. */
   readonly energyRatio: number
   readonly energySpot: Spot
@@ -27,22 +27,34 @@ const constraintOf = (use: number, margin: number): number => {
   return held > 1 ? Math.log(held) : Math.max(held - 1, -2)
 }
 
+/** What a fully integrated design tells its neighbours at a spot. */
+function neighbourOf(s: Situation, design: LatchDesign, { condition, demand, figures, uses }: Appraisal): Neighbour {
+  const linear = linearDelay(s, design, condition, figures!, demand.limits.overdrive_v)
+  const full = uses[0] * demand.limits.window_s
+  return { departure: figures!.analysis.departure, stretch: linear === undefined || !(linear > 0) || !(full > linear) ? 1 : full / linear }
+}
+
 /** Full integration of a design at every spot: what the closed forms of the search are held to. Null where no latch comes about. */
 export function calibrate(s: Situation, design: LatchDesign, spots: readonly Spot[]): { appraisals: Appraisal[]; calibration: Calibration | null } {
   const appraisals = spots.map(({ condition, demand }) => appraise(s, design, condition, demand))
-  const departure = new Map<string, number>()
+  const neighbours = new Map<string, Neighbour>()
   let largest = 0
   let calibration: Calibration | null = null
   for (const appraisal of appraisals) {
     if (appraisal.figures === null) continue
-    departure.set(spotName(appraisal), appraisal.figures.analysis.departure)
+    neighbours.set(spotName(appraisal), neighbourOf(s, design, appraisal))
     const energy = integratedEnergy(s, appraisal.figures)
     if (energy > largest) {
       largest = energy
-      calibration = { departure, energySpot: appraisal, energyRatio: energy / roughEnergy(appraisal.figures.circuit) }
+      calibration = { neighbours, energySpot: appraisal, energyRatio: energy / roughEnergy(appraisal.figures.circuit) }
     }
   }
   return { appraisals, calibration }
+}
+
+/** A design at some spots, with the large-signal figures of the calibrated neighbour. */
+export function appraiseLike(s: Situation, design: LatchDesign, spots: readonly Spot[], { neighbours }: Calibration): Appraisal[] {
+  return spots.map((spot) => appraise(s, design, spot.condition, spot.demand, neighbours.get(spotName(spot)) ?? usualNeighbour))
 }
 
 /** Cost that is made small: energy of a decision at the corner where it is largest, or area with trim. */
@@ -68,7 +80,7 @@ export function searchDesign(
   const space = unknownSpace(s, options.trim)
   const evaluate = (x: Float64Array): Trial => {
     const design = space.toDesign(x)
-    const appraisals = spots.map((spot) => appraise(s, design, spot.condition, spot.demand, calibration.departure.get(spotName(spot)) ?? 0.1))
+    const appraisals = appraiseLike(s, design, spots, calibration)
     const cost = costOf(s, design, appraisals, calibration)
     return {
       objective: Number.isFinite(cost) ? Math.log(cost) : 0,
@@ -93,7 +105,7 @@ export function nearestDesign(
     const widths = x.subarray(0, n)
     if (last !== null && last.x.every((value, i) => value === widths[i])) return last.values
     const design = space.toDesign(widths)
-    const values = spots.flatMap((spot) => appraise(s, design, spot.condition, spot.demand, calibration.departure.get(spotName(spot)) ?? 0.1).uses)
+    const values = appraiseLike(s, design, spots, calibration).flatMap(({ uses }) => uses)
       .map((use) => constraintOf(use, 0))
     last = { x: Float64Array.from(widths), values }
     return values

@@ -1,7 +1,7 @@
 import { trimSigmas } from '../offset-limits'
 import type { LatchDesign } from '../design'
 import type { Situation } from '../situation'
-import { appraise } from './appraise'
+import { appraise, usualNeighbour } from './appraise'
 import type { Spot } from './search'
 import { trimCapacitanceChange } from '../../models/offset/trim'
 import { attenuationOf, trimStepOf } from '../uses'
@@ -20,7 +20,7 @@ export interface SettledTrim {
 function neededChange(s: Situation, design: LatchDesign, spots: readonly Spot[]): number | null {
   let most = 0
   for (const { condition, demand } of spots) {
-    const { figures } = appraise(s, design, condition, demand, 0.1)
+    const { figures } = appraise(s, design, condition, demand, usualNeighbour)
     if (figures === null) return null
     const { circuit, analysis } = figures
     const range = trimSigmas(s) * figures.offset
@@ -71,7 +71,7 @@ export function smallestTrim(s: Situation, widths: LatchDesign['widths'], spots:
 function stepUse(s: Situation, design: LatchDesign, spots: readonly Spot[]): number {
   const a = attenuationOf(s, designInputCap(s, design))
   return Math.max(...spots.map(({ condition, demand }) => {
-    const { figures } = appraise(s, design, condition, demand, 0.1)
+    const { figures } = appraise(s, design, condition, demand, usualNeighbour)
     const limit = demand.limits.trim_step_v ?? 0
     return figures === null || !(limit > 0) ? Infinity : trimStepOf(design, figures)! / a / limit
   }))

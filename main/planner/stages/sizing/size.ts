@@ -3,8 +3,8 @@ import { remembering } from '../../numerics/memo'
 import type { LatchDesign } from '../design'
 import type { Demand } from '../positions'
 import type { Situation } from '../situation'
-import { appraise, type Appraisal } from './appraise'
-import { calibrate, costOf, nearestDesign, searchDesign, spotName, type Calibration, type Spot } from './search'
+import { appraise, usualNeighbour, type Appraisal } from './appraise'
+import { appraiseLike, calibrate, costOf, nearestDesign, searchDesign, spotName, type Calibration, type Spot } from './search'
 import { settleTrim, smallestTrim } from './settle-trim'
 import { startDesign } from './start'
 import { unknownSpace, widthUnknowns } from './unknowns'
@@ -20,6 +20,8 @@ const fineGain = 2e-4
 /** Cost after a pass over that before it, above which another pass is not worth its time. */
 const worthwhile = 0.995
 const neighbour = 0.1
+/** A whole number of bits that costs no more than this against the relaxed one needs no other tried. */
+const asGood = 1.01
 const repeats = 3
 /** Sizes of the first designs tried, in units of the usual one. */
 const startSizes = [1, 6]
@@ -91,7 +93,7 @@ function refine(s: Situation, spots: readonly Spot[], from: Candidate, trim: fal
 }
 
 /**
- * A neighbour a tenth away in one unknown that is feasible and cheaper by more than the search may leave: a loose end.
+ * A neighbour a tenth smaller in one unknown that is feasible and cheaper by more than the search may leave: a loose end.
  * Null where there is none.
  */
 function looseEnd(s: Situation, { design, calibration, appraisals }: Candidate): LatchDesign | null {
@@ -100,12 +102,10 @@ function looseEnd(s: Situation, { design, calibration, appraisals }: Candidate):
   const working = bindingSpots(appraisals, calibration.energySpot)
   const limit = worthwhile ** 3 * costOf(s, design, appraisals, calibration)
   for (let i = 0; i < at.length; i++) {
-    for (const step of [-neighbour, neighbour]) {
-      if (at[i] + step < space.lower[i] || at[i] + step > space.upper[i]) continue
-      const moved = space.toDesign(at.map((value, j) => (j === i ? value + step : value)))
-      const there = working.map((spot) => appraise(s, moved, spot.condition, spot.demand, calibration.departure.get(spotName(spot))))
-      if (worstUse(there) <= 1 && costOf(s, moved, there, calibration) < limit) return moved
-    }
+    if (at[i] - neighbour < space.lower[i]) continue
+    const moved = space.toDesign(at.map((value, j) => (j === i ? value - neighbour : value)))
+    const there = appraiseLike(s, moved, working, calibration)
+    if (worstUse(there) <= 1 && costOf(s, moved, there, calibration) < limit) return moved
   }
   return null
 }
@@ -148,13 +148,16 @@ function sizeFrom(s: Situation, spots: readonly Spot[], start: Candidate): { fou
   const relaxed = refine(s, spots, start, start.design.trim === null ? false : fixed ?? 'free', 1, roughPasses)
   const miss = worstUse(relaxed.appraisals)
   if (miss > outOfReach) return { found: null, miss }
-  const finished = bitChoices(s, relaxed.design).map((bits) => {
-    if (bits === false || fixed !== null) return finish(s, spots, relaxed, bits)
-    const whole: LatchDesign = { widths: relaxed.design.widths, trim: { bits, unit: relaxed.design.trim!.unit } }
-    return finish(s, spots, { ...relaxed, design: whole }, bits)
-  }).filter((c) => c.trimConverged && !missed(c))
-  const cheaper = (best: Built | null, c: Built) => (best === null || costOfCandidate(s, c) < costOfCandidate(s, best) ? c : best)
-  return { found: finished.reduce<Built | null>(cheaper, null), miss }
+  let best: Built | null = null
+  for (const bits of bitChoices(s, relaxed.design)) {
+    const { widths, trim } = relaxed.design
+    const whole = bits === false || fixed !== null ? relaxed : { ...relaxed, design: { widths, trim: { bits, unit: trim!.unit } } }
+    const candidate = finish(s, spots, whole, bits)
+    if (!candidate.trimConverged || missed(candidate)) continue
+    if (best === null || costOfCandidate(s, candidate) < costOfCandidate(s, best)) best = candidate
+    if (costOfCandidate(s, best) < asGood * costOfCandidate(s, relaxed)) break
+  }
+  return { found: best, miss }
 }
 
 const startBits = ({ plan }: Situation): number | null => (plan.comparator.offset_method === 'trim' ? plan.comparator.trim_bits ?? usualBits : null)
@@ -231,6 +234,6 @@ export function manualLatch(s: Situation, demands: readonly Demand[]): Sized {
   if (s.plan.comparator.offset_method !== 'trim') return { design: { widths, trim: null }, feasible: true, trimConverged: true }
   const bits = s.plan.comparator.trim_bits
   const settled = bits === null ? smallestTrim(s, widths, spots) : settleTrim(s, widths, bits, spots)
-  const feasible = worstUse(spots.map(({ condition, demand }) => appraise(s, settled.design, condition, demand, 0.1))) <= 1
+  const feasible = worstUse(spots.map(({ condition, demand }) => appraise(s, settled.design, condition, demand, usualNeighbour))) <= 1
   return { design: settled.design, feasible, trimConverged: settled.converged }
 }
