@@ -13,10 +13,12 @@ interface Props {
   table: Table
   children: ReactNode
   exportable?: boolean
+  /** The chart is of something before; set back, and not to be taken along. */
+  stale?: boolean
 }
 
 /** Every chart: a title, the same as a table, and ways to take either along. */
-export function ChartFrame({ title, head, table, children, exportable = true }: Props) {
+export function ChartFrame({ title, head, table, children, exportable = true, stale = false }: Props) {
   const app = useApp()
   const [asTable, setAsTable] = useState(false)
   const [copied, setCopied] = useState(false)
@@ -38,12 +40,12 @@ export function ChartFrame({ title, head, table, children, exportable = true }: 
         {head}
         <div className="chart-tools">
           <Button className="button quiet small" onPress={() => setAsTable(!asTable)}>{asTable ? 'Chart' : 'Table'}</Button>
-          <Button className="button quiet small" onPress={() => void copy()}>{copied ? 'Copied' : 'Copy table'}</Button>
-          {exportable && !asTable && <Button className="button quiet small" onPress={() => void save('svg')}>SVG</Button>}
-          {exportable && !asTable && <Button className="button quiet small" onPress={() => void save('png')}>PNG</Button>}
+          <Button className="button quiet small" isDisabled={stale} onPress={() => void copy()}>{copied ? 'Copied' : 'Copy table'}</Button>
+          {exportable && !asTable && <Button className="button quiet small" isDisabled={stale} onPress={() => void save('svg')}>SVG</Button>}
+          {exportable && !asTable && <Button className="button quiet small" isDisabled={stale} onPress={() => void save('png')}>PNG</Button>}
         </div>
       </div>
-      <div className="chart-body" ref={body}>{asTable ? <DataTable table={table} caption={title} /> : children}</div>
+      <div className="chart-body" ref={body} data-stale={stale ? '' : undefined}>{asTable ? <DataTable table={table} caption={title} /> : children}</div>
     </figure>
   )
 }

@@ -15,7 +15,7 @@ function moveBy(step: number): void {
   const next = all[here < 0 ? 0 : (here + step + all.length) % all.length]
   if (!next) return
   const last = remembered.get(next)
-  const target = last && next.contains(last) ? last : (next.querySelector<HTMLElement>('[data-room-start]') ?? next.querySelector<HTMLElement>(focusable))
+  const target = last && next.contains(last) && last.getAttribute('aria-selected') !== 'false' ? last : (next.querySelector<HTMLElement>('[data-room-start]') ?? next.querySelector<HTMLElement>(focusable))
   target?.focus()
 }
 

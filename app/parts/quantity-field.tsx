@@ -3,7 +3,7 @@ import { formatSi } from '../../main/contract/units'
 import { Formula } from '../text/formula'
 import { judge, type Judged } from '../text/judge'
 import { shortFigure, splitFigure } from '../text/labels'
-import { useTyping, type QuantityFieldProps } from './use-typing'
+import { shownIn, useTyping, type QuantityFieldProps } from './use-typing'
 
 /** What the field shows while nobody types in it: number, unit, and whether it is a default. */
 function atRest({ value, fallback, quantity, draft }: QuantityFieldProps): { text: string; unit: string; isDefault: boolean } {
@@ -20,7 +20,7 @@ export function QuantityField(props: QuantityFieldProps) {
   const id = useId()
   const { input, text, changed, judged, begin, change, click, key, end } = useTyping(props)
   const rest = atRest(props)
-  const kept = text === null && draft !== undefined ? judge(path, draft, document) : null
+  const kept = draft !== undefined && (text === null || text === draft) ? judge(path, draft, document, shownIn(props)) : null
   const mistake = kept && !kept.ok ? kept.message : problem
   return (
     <div className="field" data-mistake={mistake ? '' : undefined}>

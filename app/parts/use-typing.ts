@@ -43,20 +43,31 @@ const keysOf = (event: KeyboardEvent): [1 | -1, boolean] | undefined => ({
   ArrowUp: [1, event.shiftKey], ArrowDown: [-1, event.shiftKey], PageUp: [1, true], PageDown: [-1, true],
 } as Record<string, [1 | -1, boolean]>)[event.key]
 
+/** The value the field shows: the written one, else the default. */
+export const shownIn = ({ value, fallback }: QuantityFieldProps) => (typeof value === 'number' ? value : fallback)
+
 /** The whole value as it can be typed back. */
-function exactOf({ value, fallback, quantity }: QuantityFieldProps): string {
-  const shown = typeof value === 'number' ? value : fallback
+function exactOf(props: QuantityFieldProps): string {
+  const { quantity } = props
+  const shown = shownIn(props)
   return typeof shown === 'number' ? plainSpace(formatExact(shown, quantity.unit)) : ''
 }
 
 /** Enters a text: a value, back to the default, or kept as it is with what is wrong with it. */
 function enter(props: QuantityFieldProps, text: string): void {
   if (text.trim() === '' && !props.required) return props.onClear()
-  const judged = judge(props.path, text, props.document)
+  const judged = judge(props.path, text, props.document, shownIn(props))
   if (!judged.ok) return props.onDraft(text)
   if (judged.value === null) return props.onClear()
   props.onDraft(null)
   if (judged.value !== props.value) props.onCommit(judged.value)
+}
+
+/** Whether an entered text says what the field would show. */
+function standsFor(text: string, props: QuantityFieldProps): boolean {
+  if (text.trim() === '') return typeof props.value !== 'number'
+  const judged = judge(props.path, text, props.document)
+  return judged.ok ? judged.value === (shownIn(props) ?? null) : text === exactOf(props)
 }
 
 /** Where a step with the arrow keys leads; null when there is nothing to step from. */
@@ -75,6 +86,11 @@ export function useTyping(props: QuantityFieldProps): TypingAccess {
     if (typing?.fresh) input.current?.select()
   }, [typing?.fresh, typing?.start])
   const restart = (text: string) => setTyping({ text, start: text, fresh: true })
+  const [seen, setSeen] = useState({ value: props.value, fallback: props.fallback })
+  if (seen.value !== props.value || seen.fallback !== props.fallback) {
+    setSeen({ value: props.value, fallback: props.fallback })
+    if (typing && !changed && props.draft === undefined && !standsFor(typing.text, props)) restart(exactOf(props))
+  }
   const commit = () => {
     if (!typing || !changed) return
     enter(props, typing.text)
@@ -97,7 +113,7 @@ export function useTyping(props: QuantityFieldProps): TypingAccess {
   return {
     input, changed, key,
     text: typing?.text ?? null,
-    judged: typing && changed && typing.text.trim() !== '' ? judge(props.path, typing.text, props.document) : null,
+    judged: typing && changed && typing.text.trim() !== '' ? judge(props.path, typing.text, props.document, shownIn(props)) : null,
     begin: () => {
       restart(props.draft ?? exactOf(props))
       props.onExplain()

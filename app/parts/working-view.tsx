@@ -1,7 +1,7 @@
 import type { Working } from '../../main/contract/result'
 import { formatSi } from '../../main/contract/units'
 import { Formula } from '../text/formula'
-import { readableNumbers } from '../text/numbers'
+import { readableNumbers, unbroken } from '../text/numbers'
 
 /** How a number came about: formula, the same with its numbers, value, source. */
 export function WorkingView({ working }: { working: Working }) {
@@ -12,7 +12,7 @@ export function WorkingView({ working }: { working: Working }) {
         <span className="figure">{formatSi(working.value, working.unit, 4)}</span>
       </p>
       <p className="figure working-formula"><Formula text={working.formula} /></p>
-      {working.numbers !== working.formula && <p className="figure working-numbers"><Formula text={readableNumbers(working.numbers)} /></p>}
+      {working.numbers !== working.formula && <p className="figure working-numbers"><Formula text={unbroken(readableNumbers(working.numbers))} /></p>}
       <p className="small muted">{working.source}</p>
     </div>
   )

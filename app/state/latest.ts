@@ -4,6 +4,8 @@ import { createStore, type Store } from './store'
 export interface LatestState<K, V> {
   readonly key: K | null
   readonly value: V | null
+  /** What the value was asked with; another than `key` while a newer one is awaited. */
+  readonly valueKey: K | null
   readonly busy: boolean
   readonly failure: string | null
 }
@@ -15,7 +17,7 @@ export interface Latest<K, V> extends Store<LatestState<K, V>> {
 
 /** Something fetched on demand, of which only the newest is wanted; the old value stays until then. */
 export function createLatest<K, V>(fetch: (key: K) => Promise<Reply<V>>, same: (a: K, b: K) => boolean): Latest<K, V> {
-  const store = createStore<LatestState<K, V>>({ key: null, value: null, busy: false, failure: null })
+  const store = createStore<LatestState<K, V>>({ key: null, value: null, valueKey: null, busy: false, failure: null })
   let ticket = 0
   const ask = (key: K) => {
     const now = store.get()
@@ -26,8 +28,8 @@ export function createLatest<K, V>(fetch: (key: K) => Promise<Reply<V>>, same: (
     void fetch(key).then((reply) => {
       if (mine !== ticket) return
       store.set(reply.ok
-        ? { key, value: reply.value, busy: false, failure: null }
-        : { key, value: null, busy: false, failure: reply.error.message })
+        ? { key, value: reply.value, valueKey: key, busy: false, failure: null }
+        : { key, value: null, valueKey: null, busy: false, failure: reply.error.message })
     })
   }
   return { ...store, ask }

@@ -70,3 +70,10 @@ export function createResults(call: Call, documents: Documents): Results {
 
 /** Whether the picture on the screen is of the document as it stands. */
 export const isCurrent = (state: ResultState): boolean => state.problems.length === 0 && state.failure === null
+
+/** What a result that is not of the present document is, in a word or a few; null: it is of the present one. */
+export function setBack(state: ResultState): string | null {
+  if (state.planning) return 'planning'
+  if (state.problems.length > 0) return 'of the last valid brief'
+  return state.failure === null ? null : 'of an earlier brief'
+}

@@ -1,3 +1,4 @@
+import type { LimitName } from '../../main/contract/choices'
 import type { ComparatorEntry, Result } from '../../main/contract/result'
 import { useApp, useStore } from './use-store'
 
@@ -8,6 +9,18 @@ export const tightestUse = (entry: ComparatorEntry): number | null => (entry.tig
 
 /** Whether a use is over its limit. */
 export const isOver = (use: number | null): boolean => use !== null && use > 1 + slack
+
+/** Whether a limit is one that nothing can meet: not above zero. A trimmed offset is held against its trim step. */
+export function cannotBeMet({ limits, use }: ComparatorEntry, name: LimitName): boolean {
+  const limit = {
+    time: limits.window_s, noise: limits.noise_v, offset: limits.trim_step_v ?? limits.offset_v, kickback: limits.kickback_v,
+    memory: limits.memory_v, input: limits.input_cap_f,
+  }[name]
+  return use[name] === null && limit <= 0
+}
+
+/** A use as it is drawn: endless against a limit that nothing can meet; null when it is not known. */
+export const drawnUse = (entry: ComparatorEntry, name: LimitName): number | null => (cannotBeMet(entry, name) ? Infinity : entry.use[name])
 
 /** Whether a comparator misses any of its limits. A limit without a positive value cannot be met. */
 export function missesLimit(entry: ComparatorEntry): boolean {

@@ -1,7 +1,8 @@
 import { parseQuantity } from '../../main/contract/expression'
 import { resolutionRange, type Quantity } from '../../main/contract/quantities'
+import { formatSi } from '../../main/contract/units'
 import { valueAt } from '../state/paths'
-import { quantityOf, shortFigure } from './labels'
+import { quantityOf, shortFigure, splitFigure } from './labels'
 
 export type Judged = { readonly ok: true; readonly value: number | null } | { readonly ok: false; readonly message: string }
 
@@ -20,15 +21,33 @@ export function rangeText(path: string, document: unknown): string {
   return `${shortFigure(low, quantity.unit)} to ${shortFigure(high, quantity.unit, 10)}`
 }
 
-/** Reads what was typed into a quantity's field: a value within its range, or what is wrong with it. */
-export function judge(path: string, text: string, document: unknown): Judged {
+const bareNumber = /^(\d+\.?\d*|\.\d+)$/
+
+/** What a bare number was meant to be in a field that is shown with a prefix, where that is in the range. */
+function meant(text: string, unit: string, shown: unknown, [low, high]: readonly [number, number]): string {
+  if (typeof shown !== 'number' || unit === '' || !bareNumber.test(text)) return ''
+  const prefix = splitFigure(formatSi(shown, unit))[1].slice(0, -unit.length)
+  const typed = `${text}${prefix === 'µ' ? 'u' : prefix}`
+  const reading = prefix === '' ? null : parseQuantity(typed, unit)
+  if (!reading?.ok || reading.value < low || reading.value > high) return ''
+  return ` Did you mean ${shortFigure(reading.value, unit)}? Type ${typed}.`
+}
+
+/**
+ * Reads what was typed into a quantity's field: a value within its range, or what is wrong with it.
+ *
+ * @param shown  the value the field shows, whose prefix a bare number may have been meant with
+ */
+export function judge(path: string, text: string, document: unknown, shown: unknown = valueAt(document, path)): Judged {
   const quantity = quantityOf(path)
   if (!quantity) return { ok: false, message: 'This field takes no number.' }
   if (quantity.nullMeans !== undefined && /^(auto|null|none|default)$/i.test(text.trim())) return { ok: true, value: null }
   const reading = parseQuantity(text, quantity.unit)
   if (!reading.ok) return reading
   const [low, high] = rangeOf(path, quantity, document)
-  if (reading.value < low || reading.value > high) return { ok: false, message: `Not in the range ${rangeText(path, document)}.` }
+  if (reading.value < low || reading.value > high) {
+    return { ok: false, message: `Not in the range ${rangeText(path, document)}.${meant(text.trim(), quantity.unit, shown, [low, high])}` }
+  }
   if (quantity.integer && !Number.isInteger(reading.value)) return { ok: false, message: 'Only whole numbers make sense here.' }
   return { ok: true, value: reading.value }
 }

@@ -1,5 +1,6 @@
 import { choices, limitNames, type Choice, type ChoicePath, type LimitName } from '../../main/contract/choices'
 import { quantities, type Quantity, type QuantityPath } from '../../main/contract/quantities'
+import type { Result } from '../../main/contract/result'
 import { formatSi } from '../../main/contract/units'
 
 /** Fields of the brief that are neither quantities nor choices. */
@@ -87,3 +88,9 @@ export const percent = (use: number | null): string =>
 
 /** The limits as they are read in a sentence. */
 export const limitPhrase = (name: LimitName): string => `${lowered(limitNames[name])} limit`
+
+/** Where power, budget and predicted resolution are of: "at fast · 0.99 V · 125 °C, the corner of the largest power". */
+export function cornerShown({ corners, ledger }: Result): string {
+  const corner = corners.find(({ power_w }) => power_w === ledger.power_w)
+  return corner ? `at ${corner.name}${corners.length > 1 ? ', the corner of the largest power' : ''}` : ''
+}

@@ -18,3 +18,8 @@ function shortened(text: string): string {
 export function readableNumbers(text: string): string {
   return text.replace(number, (found) => shortened(found)).replace(/ \* /g, ' · ').replace(/\bsqrt\(/g, '√(').replace(/(?<=[\s(])-(?=\d)/g, '−')
 }
+
+/** A text in which no line breaks between a number and the unit after it. */
+export function unbroken(text: string): string {
+  return text.replace(/(?<=\d) (?=(?:[afpnuµmkMGT]?(?:V|W|F|s|m|Hz|S|J|A|Ω|C|H|bit|LSB|K)(?![\p{L}\d])|S\/s|[mµ]?m²|%|°C))/gu, '\u00a0')
+}

@@ -34,6 +34,7 @@ test('from the first screen to the sheet without a pointer', async ({ page, host
   await expect(page.locator('#bank-cell')).toContainText('Comparator 2,')
   await page.keyboard.press('F6')
   expect(await focusedRoom(page)).toBe('below')
+  await expect(page.getByRole('tab', { name: 'Waves' })).toBeFocused()
   await page.keyboard.press('Shift+F6')
   expect(await focusedRoom(page)).toBe('bank')
   const download = page.waitForEvent('download')

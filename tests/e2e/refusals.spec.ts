@@ -30,6 +30,21 @@ test('nonsense is refused beside its field, kept as it was typed, and leaves the
   }
 })
 
+test('Enter says at once what is wrong, and Undo shows the value of the document in the field with the keyboard', async ({ page, host }) => {
+  await openWindow(page, host.url, smallFlash)
+  const target = await field(page, 'converter.sample_rate_hz')
+  await type(page, 'converter.sample_rate_hz', '5')
+  await expect(target).toBeFocused()
+  await expect(target).toHaveAttribute('aria-invalid', 'true')
+  await expect(page.locator('.field', { has: target }).locator('.mistake')).toContainText('Did you mean 5 MS/s? Type 5M.')
+  await target.press('Escape')
+  await type(page, 'converter.sample_rate_hz', '250M')
+  await target.press('Control+z')
+  await expect(target).toHaveValue('500 MS/s')
+  await target.press('Control+Shift+z')
+  await expect(target).toHaveValue('250 MS/s')
+})
+
 test('what was typed stays while its section is folded and another plan step is undone', async ({ page, host }) => {
   await openWindow(page, host.url, smallFlash)
   await type(page, 'converter.lanes', 'two')

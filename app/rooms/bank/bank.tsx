@@ -2,6 +2,7 @@ import { Button } from 'react-aria-components'
 import { run } from '../../commands/command'
 import { zoomBank, zoomRange } from '../../commands/zoom-bank'
 import { Icon } from '../../parts/icon'
+import { setBack } from '../../state/result-store'
 import { useSelected } from '../../state/selection'
 import { useApp, useStore } from '../../state/use-store'
 import { formatSi } from '../../../main/contract/units'
@@ -12,9 +13,10 @@ import { Picture } from './picture'
 /** The comparators and the picture of them. */
 export function Bank() {
   const app = useApp()
-  const { result, failure, problems, planning } = useStore(app.results, (state) => state)
+  const state = useStore(app.results, (now) => now)
+  const { result, failure, problems, planning } = state
   return (
-    <section className="bank" aria-labelledby="bank-title" data-room="bank">
+    <section className="bank" aria-labelledby="bank-title" data-room="bank" data-set-back={setBack(state) ?? undefined}>
       <header className="bank-head">
         <h2 id="bank-title" className="room-title">Bank<span className="bank-count">{result ? `, ${bankTitle(result)}` : ''}</span></h2>
         <p className="bank-state small" role="status">

@@ -1,7 +1,7 @@
 import { limitNames, type LimitName } from '../../../main/contract/choices'
 import type { ComparatorEntry, Limits, Reached, Result } from '../../../main/contract/result'
 import { formatSi } from '../../../main/contract/units'
-import { missesLimit } from '../../state/selection'
+import { cannotBeMet, drawnUse, missesLimit } from '../../state/selection'
 import { limitPhrase, lowered, percent, reachedOfLimit } from '../../text/labels'
 
 /** What a comparator is called. */
@@ -14,14 +14,20 @@ export function nameOf(entry: ComparatorEntry, lanes: number): string {
 export function tightestText(entry: ComparatorEntry): string {
   if (entry.tightest === null) return 'could not be evaluated'
   const use = entry.use[entry.tightest]
-  if (use === null) return `${lowered(limitNames[entry.tightest])} has no limit that can be met`
+  if (cannotBeMet(entry, entry.tightest)) return entry.tightest === 'time' ? 'no window to decide in' : `nothing can meet its ${limitPhrase(entry.tightest)}`
+  if (use === null) return 'could not be evaluated'
   return `tightest at ${percent(use)} of its ${limitPhrase(entry.tightest)}`
+}
+
+function useText(entry: ComparatorEntry, name: LimitName): string {
+  if (cannotBeMet(entry, name)) return 'against a limit that nothing can meet'
+  return entry.use[name] === null ? 'not known' : `${percent(entry.use[name])} of its limit`
 }
 
 /** All that a cell shows, in words. */
 export function describeCell(entry: ComparatorEntry, lanes: number): string {
   const uses = (Object.keys(limitNames) as LimitName[]).slice(0, 3)
-    .map((name) => `${lowered(limitNames[name])} ${entry.use[name] === null ? 'not known' : `${percent(entry.use[name])} of its limit`}`)
+    .map((name) => `${lowered(limitNames[name])} ${useText(entry, name)}`)
   const at = entry.threshold_v === null ? '' : `, threshold ${formatSi(entry.threshold_v, 'V')}`
   const over = missesLimit(entry) ? ', over the limit' : ''
   return `${nameOf(entry, lanes)}${at}: ${uses.join(', ')}; ${tightestText(entry)}${over}`
@@ -43,6 +49,8 @@ export interface UseRow {
   readonly label: string
   readonly text: string
   readonly use: number | null
+  /** The use as it is drawn. */
+  readonly drawn: number | null
   readonly limited: boolean
   /** Ids of the workings behind it. */
   readonly workings: readonly string[]
@@ -52,7 +60,8 @@ export function useRows(entry: ComparatorEntry, offsetMethod: string): UseRow[] 
   const { limits, reached, use } = entry
   const trimmed = offsetMethod === 'trim'
   const row = (name: LimitName, label: string, got: keyof Reached, limit: keyof Limits, unit: string, more: readonly string[] = []): UseRow => ({
-    name, label, use: use[name], limited: limits[limit] !== null, text: reachedOfLimit(reached[got], limits[limit], unit),
+    name, label, use: use[name], drawn: drawnUse(entry, name), limited: limits[limit] !== null,
+    text: reachedOfLimit(reached[got], limits[limit], unit),
     workings: [`limits.${limit}`, ...more, `reached.${got}`],
   })
   return [

@@ -1,5 +1,5 @@
 import type { ComparatorEntry } from '../../../main/contract/result'
-import { isOver, missesLimit, tightestUse } from '../../state/selection'
+import { drawnUse, isOver, missesLimit, tightestUse } from '../../state/selection'
 import type { Arrangement, Zoom } from './arrange'
 import { paintCopper } from './paint-copper'
 import { tintOf, type Palette } from './palette'
@@ -102,7 +102,7 @@ function paintStrokes(context: CanvasRenderingContext2D, palette: Palette, frame
   const thick = Math.min(12, Math.max(3, frame.w * 0.13))
   const pitch = Math.min(frame.w / 3.2, thick * 2.1)
   strokeNames.forEach((name, place) => {
-    const use = entry.use[name]
+    const use = drawnUse(entry, name)
     const centre = frame.x + frame.w / 2 + (place - 1) * pitch
     if (use === null) return paintUnknown(context, palette, centre, frame, thick)
     const tall = Math.min(frame.h - 1, Math.max(1.5, use * limitHeight * frame.h))

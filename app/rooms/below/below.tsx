@@ -25,7 +25,7 @@ export function Below() {
       <Tabs className="tabs" selectedKey={tab} onSelectionChange={(key) => run(app, showTab, { tab: key as Tab })}>
         <TabList className="tab-list" aria-label="Rooms below the bank">
           {(Object.keys(tabs) as Tab[]).map((key) => (
-            <TabHandle key={key} id={key} className="tab">
+            <TabHandle key={key} id={key} className="tab" data-room-start={key === tab ? '' : undefined}>
               {tabs[key]}{key === 'findings' && findings > 0 && <span className="tab-count figure">{findings}</span>}
             </TabHandle>
           ))}

@@ -3,7 +3,7 @@ import { formatSi } from '../../../main/contract/units'
 import { ChartFrame } from '../../charts/chart-frame'
 import type { Table } from '../../charts/table'
 import { useApp, useStore } from '../../state/use-store'
-import { shortFigure } from '../../text/labels'
+import { cornerShown, shortFigure } from '../../text/labels'
 
 const names: Readonly<Record<BudgetLine['item'], string>> = {
   quantisation: 'Quantisation', jitter: 'Aperture jitter', sampling_noise: 'Sampling noise', reference: 'Reference elements',
@@ -39,7 +39,7 @@ export function Budget() {
   const allowed = formatSi(rms(result.quantities.error_power_allowed_v2), 'V')
   return (
     <ChartFrame title="Where the error power goes" table={tableOf(result)} exportable={false}
-      head={<p className="small muted"><span className="figure">{allowed}</span> rms is allowed for <span className="figure">{shortFigure(asked, 'bit')}</span></p>}>
+      head={<p className="small muted"><span className="figure">{allowed}</span> rms is allowed for <span className="figure">{shortFigure(asked, 'bit')}</span>; used {cornerShown(result)}</p>}>
       <Stack budget={result.budget} whole={result.quantities.error_power_allowed_v2} />
       <Rows budget={result.budget} whole={result.quantities.error_power_allowed_v2} />
     </ChartFrame>

@@ -7,7 +7,7 @@ import { useApp, useStore } from '../../state/use-store'
 const measures = [
   { key: 'delay_s', title: 'Delay', unit: 's', tone: 'var(--time)' },
   { key: 'noise_v', title: 'Noise', unit: 'V', tone: 'var(--noise)' },
-  { key: 'offset_v', title: 'Offset', unit: 'V', tone: 'var(--offset)' },
+  { key: 'offset_v', title: 'Raw offset', unit: 'V', tone: 'var(--offset)' },
   { key: 'power_w', title: 'Power', unit: 'W', tone: 'var(--copper)' },
 ] as const
 

@@ -54,7 +54,7 @@ function LimitLine({ row }: { row: UseRow }) {
         <Button slot="trigger" className="line-button" data-over={over ? '' : undefined}>
           <span className="line-name">{row.label}{over && <span className="mark over">over</span>}</span>
           <span className="figure">{row.text}</span>
-          <UseBar use={row.use} tone={tones[row.name] ?? 'muted'} />
+          <UseBar use={row.drawn} tone={tones[row.name] ?? 'muted'} />
         </Button>
       </Heading>
       <DisclosurePanel className="line-panel">{open && <LimitBody row={row} />}</DisclosurePanel>

@@ -1,6 +1,7 @@
 import { ledgerItems } from '../../../main/contract/choices'
 import type { LedgerLine } from '../../../main/contract/result'
 import { formatSi } from '../../../main/contract/units'
+import { setBack } from '../../state/result-store'
 import { useApp, useStore } from '../../state/use-store'
 import { ComparatorPanel } from './comparator-panel'
 import { Line } from './line'
@@ -11,8 +12,9 @@ const none: never[] = []
 export function Ledger() {
   const app = useApp()
   const ledger = useStore(app.results, (state) => state.result?.ledger ?? null)
+  const back = useStore(app.results, setBack)
   return (
-    <section className="ledger scroll" aria-label="Ledger, line by line" data-room="ledger">
+    <section className="ledger scroll" aria-label="Ledger, line by line" data-room="ledger" data-set-back={back ?? undefined}>
       <Group title="Power" lines={ledger?.power ?? none} total={ledger?.power_w ?? null} unit="W" />
       <ComparatorPanel />
       <Group title="Area" lines={ledger?.area ?? none} total={ledger?.area_m2 ?? null} unit="m²" />

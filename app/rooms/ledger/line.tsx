@@ -7,6 +7,7 @@ import { dropOverride } from '../../commands/drop-override'
 import { ShareBar } from '../../parts/use-bar'
 import { WorkingView } from '../../parts/working-view'
 import { useApp, useStore } from '../../state/use-store'
+import { unbroken } from '../../text/numbers'
 import { OverrideForm } from './override-form'
 import { workingsOf } from './find-workings'
 
@@ -36,7 +37,7 @@ function LineBody({ line, label, share, unit }: Props) {
   const own = workingsOf(workings ?? [], [line.item])
   return (
     <>
-      <p className="small">{(share * 100).toPrecision(3)} % of the {unit === 'W' ? 'power' : 'area'}. {line.model}</p>
+      <p className="small">{unbroken(`${(share * 100).toPrecision(3)} % of the ${unit === 'W' ? 'power' : 'area'}. ${line.model}`)}</p>
       {own.map((working) => <WorkingView key={working.id} working={working} />)}
       {editing
         ? <OverrideForm item={line.item} label={label} unit={unit} start={line.value} onDone={() => setEditing(false)} />

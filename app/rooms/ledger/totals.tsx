@@ -4,19 +4,20 @@ import { formatSi } from '../../../main/contract/units'
 import { run } from '../../commands/command'
 import { selectComparator } from '../../commands/select-comparator'
 import { showTab } from '../../commands/show-tab'
-import { isOver, tightestEntry, tightestUse } from '../../state/selection'
+import { setBack } from '../../state/result-store'
+import { cannotBeMet, isOver, tightestEntry, tightestUse } from '../../state/selection'
 import { useApp, useStore } from '../../state/use-store'
 import { nameOf } from '../bank/describe'
-import { limitPhrase, percent, shortFigure, splitFigure } from '../../text/labels'
+import { cornerShown, limitPhrase, percent, shortFigure, splitFigure } from '../../text/labels'
 
 /** What the plan comes to; always in sight. */
 export function Totals() {
   const app = useApp()
   const result = useStore(app.results, (state) => state.result)
-  const stale = useStore(app.results, (state) => state.problems.length > 0)
+  const back = useStore(app.results, setBack)
   return (
-    <section className="totals" aria-labelledby="totals-title" data-room="totals">
-      <h2 id="totals-title" className="room-title">Ledger{stale && <span className="stale">, of the last valid brief</span>}</h2>
+    <section className="totals" aria-labelledby="totals-title" data-room="totals" data-set-back={back ?? undefined}>
+      <h2 id="totals-title" className="room-title">Ledger{back !== null && <span className="stale">, {back}</span>}</h2>
       {result ? <Figures result={result} /> : <div className="totals-plate empty" />}
     </section>
   )
@@ -30,19 +31,21 @@ function Figures({ result }: { result: Result }) {
     <div className="totals-plate">
       <Total figure={formatSi(ledger.power_w, 'W')} label="power" />
       <Total figure={formatSi(ledger.area_m2, 'm²')} label="area" />
-      <Total figure={formatSi(predicted.enob_bits, 'bit')} label={`effective, of ${shortFigure(asked, '')} asked`} bad={short} />
+      <Total figure={formatSi(predicted.enob_bits, 'bit')} label={`effective, of ${shortFigure(asked, '')} asked`} bad={short} more={cornerShown(result)} />
       <Tightest result={result} />
       <Findings findings={result.findings} />
     </div>
   )
 }
 
-function Total({ figure, label, bad = false }: { figure: string; label: string; bad?: boolean }) {
+interface TotalProps { figure: string; label: string; bad?: boolean; more?: string }
+
+function Total({ figure, label, bad = false, more = '' }: TotalProps) {
   const [number, unit] = splitFigure(figure)
   return (
-    <p className="total" data-bad={bad ? '' : undefined}>
+    <p className="total" data-bad={bad ? '' : undefined} title={more || undefined}>
       <span className="total-figure figure">{number}<span className="total-unit">{unit === '' ? '' : ` ${unit}`}</span></span>
-      <span className="small muted">{label}</span>
+      <span className="small muted">{label}{more !== '' && <span className="hidden">, {more}</span>}</span>
     </p>
   )
 }
@@ -51,12 +54,13 @@ function Tightest({ result }: { result: Result }) {
   const app = useApp()
   const entry = tightestEntry(result)
   const use = tightestUse(entry)
-  const label = entry.tightest === null ? 'not evaluated' : `of ${limitPhrase(entry.tightest)}`
-  const [number, unit] = splitFigure(percent(use))
+  const hopeless = entry.tightest !== null && cannotBeMet(entry, entry.tightest)
+  const [number, unit] = hopeless ? [entry.tightest === 'time' ? 'no window' : 'nothing can meet it', ''] : splitFigure(percent(use))
+  const label = entry.tightest === null || (use === null && !hopeless) ? 'not evaluated' : `${hopeless ? '' : 'of '}${limitPhrase(entry.tightest)}`
   return (
-    <Button className="total" data-bad={isOver(use) ? '' : undefined} onPress={() => run(app, selectComparator, { index: entry.index })}>
+    <Button className="total" data-bad={isOver(use) || hopeless ? '' : undefined} onPress={() => run(app, selectComparator, { index: entry.index })}>
       <span className="hidden">Tightest use: </span>
-      <span className="total-figure figure">{number}<span className="total-unit">{unit === '' ? '' : ` ${unit}`}</span></span>
+      <span className="total-figure figure" data-words={hopeless ? '' : undefined}>{number}<span className="total-unit">{unit === '' ? '' : ` ${unit}`}</span></span>
       <span className="small muted">{label}<span className="hidden">, {nameOf(entry, result.plan.converter.lanes)}</span></span>
     </Button>
   )

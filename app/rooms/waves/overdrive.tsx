@@ -1,8 +1,9 @@
 import { useId, useState } from 'react'
+import { Button } from 'react-aria-components'
 import { parseQuantity } from '../../../main/contract/expression'
 import { formatSi } from '../../../main/contract/units'
 
-interface Props { value: number | null; shown: number | null; onChange(value: number | null): void }
+interface Props { value: number | null; shown: number | null; limit: number | null; onChange(value: number | null): void }
 
 const most_v = 20
 
@@ -13,7 +14,7 @@ function read(text: string): number | null | undefined {
 }
 
 /** The overdrive of the waves; empty: the one that the comparator has to resolve. */
-export function Overdrive({ value, shown, onChange }: Props) {
+export function Overdrive({ value, shown, limit, onChange }: Props) {
   const id = useId()
   const [text, setText] = useState<string | null>(null)
   const wrong = text !== null && read(text) === undefined
@@ -23,12 +24,17 @@ export function Overdrive({ value, shown, onChange }: Props) {
     setText(null)
     onChange(next)
   }
+  const atLimit = () => {
+    setText(null)
+    onChange(limit)
+  }
   return (
     <span className="overdrive">
       <label htmlFor={id}>overdrive</label>
       <input id={id} className="figure" autoComplete="off" spellCheck={false} value={text ?? (value === null ? '' : formatSi(value, 'V'))}
         placeholder={shown === null ? 'auto' : formatSi(shown, 'V')} aria-invalid={wrong || undefined} title={wrong ? 'Above 0, at most 20 V.' : undefined}
         onChange={(event) => setText(event.target.value)} onBlur={commit} onKeyDown={(event) => { if (event.key === 'Enter') commit() }} />
+      {limit !== null && limit > 0 && limit <= most_v && <Button className="button quiet small" isDisabled={value === limit} onPress={atLimit}>at the limit’s overdrive</Button>}
     </span>
   )
 }

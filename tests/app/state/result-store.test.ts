@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { createDocuments } from '../../../app/state/document-store'
 import { createLatest } from '../../../app/state/latest'
 import { putAt } from '../../../app/state/paths'
-import { createResults } from '../../../app/state/result-store'
+import { createResults, setBack } from '../../../app/state/result-store'
 import type { Call } from '../../../main/contract/channels'
 import { fail, succeed, type Reply } from '../../../main/contract/errors'
 import type { PlanInput } from '../../../main/contract/plan'
@@ -103,11 +103,24 @@ describe('the newest of what is asked for', () => {
     latest.ask(1)
     latest.ask(2)
     latest.ask(2)
+    expect(latest.get().valueKey).toBeNull()
     expect(answers).toHaveLength(2)
     answers[1](succeed('two'))
     answers[0](succeed('one'))
     await new Promise((done) => setTimeout(done))
     expect(latest.get().value).toBe('two')
     expect(latest.get().busy).toBe(false)
+    latest.ask(3)
+    expect(latest.get()).toMatchObject({ key: 3, value: 'two', valueKey: 2, busy: true })
+  })
+})
+
+describe('a result that is not of the present document', () => {
+  it('is said to be so while another is planned, and when the brief was refused', () => {
+    const fresh = { result: null, revision: 1, planning: false, seeking: false, problems: [], failure: null }
+    expect(setBack(fresh)).toBeNull()
+    expect(setBack({ ...fresh, planning: true })).toBe('planning')
+    expect(setBack({ ...fresh, problems: [{ path: 'a', value: '', allowed: '', hint: '', code: 'missing' }] })).toBe('of the last valid brief')
+    expect(setBack({ ...fresh, failure: 'It stopped.' })).toBe('of an earlier brief')
   })
 })

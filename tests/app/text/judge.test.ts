@@ -27,6 +27,23 @@ describe('what is typed into a field', () => {
     expect(rangeText('converter.resolution_bits', sarTen)).toBe('4 bit to 18 bit')
   })
 
+  it.each([
+    ['5', 2e9, 'Did you mean 5 GS/s? Type 5G.'], ['5', 0.5, null], ['5e-3', 2e9, null], ['0.0001', 2e9, 'Did you mean 100 kS/s? Type 0.0001G.'],
+  ])('a bare %s in a sample rate shown as %d asks what was meant', (text, shown, said) => {
+    const judged = judge('converter.sample_rate_hz', text, flashTrim, shown)
+    expect(judged.ok).toBe(false)
+    if (judged.ok) return
+    if (said === null) expect(judged.message).not.toMatch(/Did you mean/)
+    else expect(judged.message).toContain(said)
+  })
+
+  it('asks nothing where the prefix would not help', () => {
+    const judged = judge('comparator.widths.input_length_m', '4', flashTrim, 2e-3)
+    expect(!judged.ok && judged.message).not.toMatch(/Did you mean/)
+    const small = judge('comparator.widths.input_length_m', '28', flashTrim, 3e-8)
+    expect(!small.ok && small.message).toContain('Did you mean 28 nm? Type 28n.')
+  })
+
   it('reads "auto" where null has a meaning', () => {
     expect(judge('comparator.trim_bits', 'auto', flashTrim)).toEqual({ ok: true, value: null })
     expect(judge('converter.lanes', 'auto', flashTrim).ok).toBe(false)
