@@ -1,3 +1,4 @@
+import { capacitanceOffset } from '../../main/planner/models/offset/node-capacitance'
 import { describe, expect, it } from 'vitest'
 import { thermalVoltage } from '../../main/planner/constants'
 import { effectiveBits, jitterPower, quantisationPower, samplingPower, sndr } from '../../main/planner/models/budget/error-power'
@@ -117,7 +118,7 @@ describe('offset', () => {
     // Half of the ratio moved from one node to the other makes nodes that differ by it.
     const moved = trimStep(ratio / 2, threshold_v, 1)
     expectPrinted(1e3 * moved, linearMv, 'linear')
-    expectCrossCheck(1e3 * moved, exactMv, 0.026, 'the source’s exact form: the planner’s trim is linear in the capacitance')
+    expectPrinted(1e3 * capacitanceOffset(threshold_v, 1 + ratio), exactMv, 'exact')
     expect(trimCapacitanceChange(1, moved, threshold_v)).toBeCloseTo(ratio, 12)
   })
 

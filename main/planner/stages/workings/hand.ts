@@ -1,6 +1,7 @@
 import type { ComparatorEntry, Working } from '../../../contract/result'
 import { boltzmann } from '../../constants'
 import { handDelay, handNoise } from '../../models/merit/hand-formulas'
+import { capacitanceOffset } from '../../models/offset/node-capacitance'
 import { mosEvaluate, mosPoint, type MosDevice, type MosPoint } from '../../models/mos/device'
 import { references } from '../../references'
 import type { Bank } from '../bank'
@@ -47,6 +48,18 @@ function against(hand: number, engine: number): string {
   return `${percent < 0 ? '−' : '+'}${Math.abs(percent)} % against the engine`
 }
 
+/** Relative difference of the inner nodes that the hand formula is shown for. */
+const shownDifference = 0.05
+
+function capacitanceWorking({ analysis, circuit }: LatchFigures, threshold: number, name: string): Working {
+  const ratio = 1 + shownDifference
+  const value = capacitanceOffset(threshold, ratio)
+  const engine = Math.abs(analysis.capacitanceWeight[circuit.inner]) * shownDifference
+  return working('hand.capacitance_offset_v', `Hand formula: 5 % between the inner nodes, ${name}, ${against(value, engine)}`, '(V_T/2)(r − 1/r)',
+    numbers`${threshold} / 2 * (${ratio} - 1 / ${ratio})`, value, 'V',
+    `${references.practice}, charge balance of the two nodes; the whole threshold at the input: the engine divides by the gain that the input pair has built up by then`)
+}
+
 /** First-order hand formulas at one condition, with how far they are from the engine and why. */
 export function handWorkings({ s }: Bank, { figures, condition }: Evaluated, entry: ComparatorEntry): Working[] {
   const h = handInputs(figures!)
@@ -55,7 +68,7 @@ export function handWorkings({ s }: Bank, { figures, condition }: Evaluated, ent
   const { gamma } = s.card.n
   const time = (2 * h.inner * h.threshold) / h.tail
   const noise = handNoise(condition.temperature, gamma, h.inputG, time)
-  const list: Working[] = []
+  const list: Working[] = [capacitanceWorking(figures!, h.threshold, condition.name)]
   if (Number.isFinite(noise) && time > 0) {
     list.push(working('hand.noise_v', `Hand formula: noise, ${condition.name}, ${against(noise, analysis.noise)}`, '√(4kTγ / (g_m·t)), t = 2 C_X V_T / I_tail',
       numbers`sqrt(4 * ${boltzmann} * ${condition.temperature} * ${gamma} / (${h.inputG} * (2 * ${h.inner} * ${h.threshold} / ${h.tail})))`, noise, 'V',
