@@ -24,11 +24,13 @@ function another(path: string, quantity: Quantity, now: unknown): number {
 /** The start for a group of fields: the document in which they have an effect, or null while that is still to come. */
 function startFor(path: string): PlanInput | null {
   const base: PlanInput = structuredClone(path.startsWith('converter.sar.') ? smallSar : smallFlash)
-  for (const condition of conditionsOf(path)) {
+  const conditions = conditionsOf(path)
+  const second = conditions.some(({ is }) => is === 'double_tail') ? { second_tail_m: 2e-6, second_input_m: 1e-6 } : {}
+  for (const condition of conditions) {
     if (later(condition.path).includes(condition.is)) return null
     putAt(base, condition.path, condition.is)
     if (condition.path === 'comparator.sizing' && condition.is === 'manual') {
-      putAt(base, 'comparator.widths', { input_m: 2e-6, cross_n_m: 1.5e-6, cross_p_m: 1.5e-6, tail_m: 2e-6, reset_m: 5e-7 })
+      putAt(base, 'comparator.widths', { input_m: 2e-6, cross_n_m: 1.5e-6, cross_p_m: 1.5e-6, tail_m: 2e-6, reset_m: 5e-7, ...second })
     }
   }
   return base

@@ -104,7 +104,7 @@ export async function bytesOf(download: Download): Promise<Buffer> {
 }
 
 /** A figure of the totals, by its label. */
-export const total = (page: Page, label: string): Locator => page.locator('.total', { hasText: label }).locator('.total-figure')
+export const total = (page: Page, label: string): Locator => page.locator('.total', { has: page.locator('.small', { hasText: new RegExp(`^${label}`) }) }).locator('.total-figure')
 
 /** A small flash, planned quickly. */
 export const smallFlash: PlanInput = {
