@@ -88,5 +88,6 @@ test('a remedy of a finding is applied as one step, and the field it is about is
   await expect(page.locator('.finding[data-severity=stop]').first()).toBeVisible({ timeout: 90_000 })
   expect(wire.last()?.document.converter.sample_rate_hz).toBe(2e9)
   await page.locator('.finding .link').first().click()
-  expect(await page.evaluate(() => (document.activeElement as HTMLElement | null)?.dataset['path'] ?? '')).toMatch(/^(converter|comparator|budget)\./)
+  const focused = () => page.evaluate(() => (document.activeElement as HTMLElement | null)?.dataset['path'] ?? '')
+  await expect.poll(focused).toMatch(/^(converter|comparator|budget)\./)
 })
