@@ -10,7 +10,7 @@ export default defineConfig({
   outputDir: fileOf('../../test-results'),
   globalSetup: fileOf('global-setup.ts'),
   workers: 1,
-  retries: 0,
+  retries: process.env['CI'] ? 1 : 0,
   forbidOnly: true,
   timeout: 90_000,
   expect: { timeout: 20_000 },
