@@ -3,21 +3,11 @@ import { fail, type Failure } from '../contract/errors'
 import type { Plan } from '../contract/plan'
 import type { Result } from '../contract/result'
 import type { Waves } from '../contract/waves'
+import type { PlanOptions } from '../planner/plan'
+import type { WavesOptions } from '../planner/waves'
 import { isSuperseded } from './superseded'
 
-export interface PlanOptions {
-  /** Entry whose workings are wanted, from 1; the tightest when absent. */
-  readonly workingsFor?: number
-  /** Whether remedies of an infeasible plan are looked for; default true. */
-  readonly remedies?: boolean
-}
-
-export interface WavesOptions {
-  /** Entry of the bank, from 1. */
-  readonly index: number
-  /** Differential overdrive [V], > 0; null: that of the entry's limit. */
-  readonly overdrive_v: number | null
-}
+export type { PlanOptions, WavesOptions }
 
 /** Where the planner runs. It takes completed plans; use cases turn what it throws into replies. */
 export interface Compute {

@@ -3,7 +3,7 @@ import { remembering } from '../../numerics/memo'
 import type { LatchDesign } from '../design'
 import type { Demand } from '../positions'
 import type { Situation } from '../situation'
-import { appraise, usualNeighbour, type Appraisal } from './appraise'
+import type { Appraisal } from './appraise'
 import { appraiseLike, calibrate, costOf, nearestDesign, searchDesign, spotName, type Calibration, type Spot } from './search'
 import { settleTrim, smallestTrim } from './settle-trim'
 import { startDesign } from './start'
@@ -33,8 +33,6 @@ const sizesKept = 24
 
 export interface Sized {
   readonly design: LatchDesign
-  /** Whether every limit that can steer the sizing is met at every spot. */
-  readonly feasible: boolean
   readonly trimConverged: boolean
 }
 
@@ -197,7 +195,7 @@ function nearest(s: Situation, spots: readonly Spot[], start: Candidate): Sized 
     return built(s, spots, lowest(s, spots, { ...relaxed, design: whole }, bits))
   })
   const best = finished.reduce((a, c) => (worstUse(c.appraisals) < worstUse(a.appraisals) ? c : a))
-  return { design: best.design, feasible: false, trimConverged: best.trimConverged }
+  return { design: best.design, trimConverged: best.trimConverged }
 }
 
 /** The cheapest design that meets every limit, from the first start that leads to one; else how far the search stayed from one. */
@@ -221,19 +219,18 @@ export const sizeFeasible = remembering((s: Situation, demands: readonly Demand[
  */
 export function sizeLatch(s: Situation, demands: readonly Demand[]): Sized {
   const { design } = sizeFeasible(s, demands)
-  if (design !== null) return { design, feasible: true, trimConverged: true }
+  if (design !== null) return { design, trimConverged: true }
   const spots = spotsOf(s, demands)
   const start = startCandidate(s, spots, demands, startSizes[0]) ?? startCandidate(s, spots, demands, startSizes[1])
-  return start === null ? { design: startDesign(s, demands, startBits(s), 1), feasible: false, trimConverged: true } : nearest(s, spots, start)
+  return start === null ? { design: startDesign(s, demands, startBits(s), 1), trimConverged: true } : nearest(s, spots, start)
 }
 
 /** Given widths as they stand; only an open number of trim bits is found. */
 export function manualLatch(s: Situation, demands: readonly Demand[]): Sized {
   const spots = spotsOf(s, demands)
   const widths = s.plan.comparator.widths!
-  if (s.plan.comparator.offset_method !== 'trim') return { design: { widths, trim: null }, feasible: true, trimConverged: true }
+  if (s.plan.comparator.offset_method !== 'trim') return { design: { widths, trim: null }, trimConverged: true }
   const bits = s.plan.comparator.trim_bits
   const settled = bits === null ? smallestTrim(s, widths, spots) : settleTrim(s, widths, bits, spots)
-  const feasible = worstUse(spots.map(({ condition, demand }) => appraise(s, settled.design, condition, demand, usualNeighbour))) <= 1
-  return { design: settled.design, feasible, trimConverged: settled.converged }
+  return { design: settled.design, trimConverged: settled.converged }
 }
